@@ -66,6 +66,30 @@ internal static class Guard
         }
     }
 
+    public static void CountAt(long value, int index, string name)
+    {
+        if (value < 0)
+        {
+            throw OutOfRange($"{name}[{Display.Of(index)}]", value, "a count, 0 or more");
+        }
+    }
+
+    public static void NotNaNAt(double value, int index, string name)
+    {
+        if (double.IsNaN(value))
+        {
+            throw new ArgumentException($"{name} is NaN at index {Display.Of(index)}; allowed is any number, infinities included.", name);
+        }
+    }
+
+    public static void NotEmpty(long length, string name)
+    {
+        if (length == 0)
+        {
+            throw new ArgumentException($"{name} is empty; at least one subject is needed.", name);
+        }
+    }
+
     public static void AtLeast(long value, long minimum, [CallerArgumentExpression(nameof(value))] string name = "")
     {
         if (value < minimum)

@@ -1,0 +1,138 @@
+using DiagnosticAccuracy.Roc;
+
+namespace DiagnosticAccuracy;
+
+/// <summary>
+/// The empirical ROC curve of a test: sensitivity and specificity at every cutoff the data can tell apart.
+/// </summary>
+/// <remarks>
+/// Subjects with equal scores change sides together, so a tie between the groups is one sloped step. No point is left out, and the
+/// direction is the one stated with the sample.
+/// </remarks>
+public sealed class RocCurve
+{
+    private readonly CountArray _truePositives;
+    private readonly CountArray _falsePositives;
+
+    private RocCurve(ScoredSample sample)
+    {
+        Sample = sample;
+        int levels = sample.LevelCount;
+        CountArray truePositives = CountArray.Create(levels + 1, sample.Total);
+        CountArray falsePositives = CountArray.Create(levels + 1, sample.Total);
+        if (truePositives.Narrow is { } narrowTrue && falsePositives.Narrow is { } narrowFalse
+            && sample.With.Narrow is { } with && sample.Without.Narrow is { } without)
+        {
+            Accumulate(with, narrowTrue);
+            Accumulate(without, narrowFalse);
+        }
+        else
+        {
+            for (int i = 0; i < levels; i++)
+            {
+                truePositives.Set(i + 1, truePositives[i] + sample.With[levels - 1 - i]);
+                falsePositives.Set(i + 1, falsePositives[i] + sample.Without[levels - 1 - i]);
+            }
+        }
+
+        _truePositives = truePositives;
+        _falsePositives = falsePositives;
+        Points = new LazyList<OperatingPoint>(levels + 1, PointAt);
+        Area = new AreaUnderCurve(PlacementMoments.Of(sample));
+    }
+
+    /// <summary>Gets the sample the curve was made from.</summary>
+    public ScoredSample Sample { get; }
+
+    /// <summary>
+    /// Gets the points of the curve: first the cutoff beyond every score (nobody positive: sensitivity 0, specificity 1), then
+    /// one for each distinct score from the one that speaks most for the condition to the one that speaks least (everybody positive).
+    /// </summary>
+    public IReadOnlyList<OperatingPoint> Points { get; }
+
+    /// <summary>Gets the area under the curve.</summary>
+    public AreaUnderCurve Area { get; }
+
+    /// <summary>The empirical curve of a sample.</summary>
+    /// <param name="sample">The sample.</param>
+    /// <returns>The curve.</returns>
+    /// <exception cref="ArgumentNullException"><paramref name="sample"/> is null.</exception>
+    public static RocCurve Empirical(ScoredSample sample)
+    {
+        Guard.NotNull(sample);
+        return new RocCurve(sample);
+    }
+
+    /// <summary>What the test does at any cutoff, whether or not a subject has that score.</summary>
+    /// <param name="cutoff">The cutoff, in the direction of the sample.</param>
+    /// <returns>The cutoff as given, with its four cells.</returns>
+    /// <exception cref="ArgumentException">The cutoff's direction is not the sample's.</exception>
+    public OperatingPoint At(Cutoff cutoff)
+    {
+        if (cutoff.Direction != Sample.Direction)
+        {
+            throw new ArgumentException(
+                $"{nameof(cutoff)} is {cutoff}; allowed is a cutoff in the direction of the sample, {Sample.Direction}.", nameof(cutoff));
+        }
+
+        return new OperatingPoint(cutoff, TableAt(cutoff.Score is { } score ? LevelsPositiveAt(score) : 0));
+    }
+
+    /// <summary>For example "131 points, area 0.861438 (90 with, 51 without the condition)".</summary>
+    /// <returns>The text, in the invariant culture.</returns>
+    public override string ToString() => $"{Display.Of(Points.Count)} points, area {Area}";
+
+    internal CountArray TruePositives => _truePositives;
+
+    internal CountArray FalsePositives => _falsePositives;
+
+    /// <summary>The point at which so many levels, counted from the most positive one, are positive.</summary>
+    internal OperatingPoint PointAt(int levelsPositive) => new(
+        levelsPositive == 0
+            ? Cutoff.Beyond(Sample.Direction)
+            : Cutoff.At(Sample.Scores[Sample.LevelCount - levelsPositive], Sample.Direction),
+        TableAt(levelsPositive));
+
+    private static void Accumulate(int[] counts, int[] cumulative)
+    {
+        int sum = 0;
+        int levels = cumulative.Length - 1;
+        for (int i = 0; i < levels; i++)
+        {
+            sum += counts[levels - 1 - i];
+            cumulative[i + 1] = sum;
+        }
+    }
+
+    private ConfusionMatrix TableAt(int levelsPositive)
+    {
+        long truePositives = _truePositives[levelsPositive];
+        long falsePositives = _falsePositives[levelsPositive];
+        return new ConfusionMatrix(
+            truePositives, falsePositives, Sample.WithCondition - truePositives, Sample.WithoutCondition - falsePositives);
+    }
+
+    // Scores run from least to most positive; the positive ones are those from the first that reaches the cutoff.
+    private int LevelsPositiveAt(double score)
+    {
+        int low = 0;
+        int high = Sample.LevelCount;
+        while (low < high)
+        {
+            int middle = low + ((high - low) / 2);
+            bool positive = Sample.Direction == ScoreDirection.HigherIsPositive
+                ? Sample.Scores[middle] >= score
+                : Sample.Scores[middle] <= score;
+            if (positive)
+            {
+                high = middle;
+            }
+            else
+            {
+                low = middle + 1;
+            }
+        }
+
+        return Sample.LevelCount - low;
+    }
+}
