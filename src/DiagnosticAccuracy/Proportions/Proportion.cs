@@ -56,6 +56,8 @@ public readonly record struct Proportion : IIntervalQuantity
     /// <summary>Gets the proportion of the failures: 1 minus this one, with its counts.</summary>
     public Proportion Complement => new(Failures, Trials, _emptyReason ?? UndefinedReason.NoTrials);
 
+    internal string Counts => Display.Of(Successes) + "/" + Display.Of(Trials);
+
     /// <inheritdoc/>
     ConfidenceInterval IIntervalQuantity.Interval(Confidence confidence) => Interval(confidence);
 
@@ -86,6 +88,6 @@ public readonly record struct Proportion : IIntervalQuantity
     /// <summary>For example "81/263 = 0.307985", or "0/0 (undefined: ...)".</summary>
     /// <returns>The text, in the invariant culture.</returns>
     public override string ToString() => IsDefined
-        ? $"{Display.Of(Successes)}/{Display.Of(Trials)} = {Display.Of(Value)}"
+        ? $"{Counts} = {Display.Of(Value)}"
         : $"0/0 ({Display.Undefined(WhyUndefined!)})";
 }
