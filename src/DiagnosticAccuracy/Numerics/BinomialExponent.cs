@@ -1,5 +1,3 @@
-using System;
-
 namespace DiagnosticAccuracy.Numerics;
 
 /// <summary>

@@ -1,5 +1,4 @@
 using System.Numerics;
-using DiagnosticAccuracy.Numerics;
 
 namespace DiagnosticAccuracy.Roc;
 
@@ -16,79 +15,83 @@ internal readonly record struct PlacementMoments(
 {
     public static PlacementMoments Of(ScoredSample sample)
     {
-        if (sample.With.Narrow is { } with && sample.Without.Narrow is { } without)
+        if (sample.With.Narrow is not { } with || sample.Without.Narrow is not { } without)
         {
-            // 4 n1 n0^2, the largest of the sums, is at most 16 n^3 / 27, which stays below 2^64 up to 3.1 million subjects.
-            return sample.Total <= 3_000_000
-                ? Small(sample, with, without)
-                : Narrow(sample, with, without);
+            return OfWideCounts(sample);
         }
 
-        return Wide(sample);
+        return sample.Total <= ShortPlacementSums.MostSubjects
+            ? OfLevels(new ShortPlacementSums(sample.WithCondition, sample.WithoutCondition), with, without, sample.LevelCount)
+            : OfLevels(new LongPlacementSums(sample.WithCondition, sample.WithoutCondition), with, without, sample.LevelCount);
     }
 
-    private static PlacementMoments Small(ScoredSample sample, int[] with, int[] without)
+    /// <summary>The sums of two groups whose keys are sorted, without making levels of them.</summary>
+    public static PlacementMoments OfSortedKeys(ReadOnlySpan<ulong> with, ReadOnlySpan<ulong> without) =>
+        with.Length + (long)without.Length <= ShortPlacementSums.MostSubjects
+            ? OfSortedKeys(new ShortPlacementSums(with.Length, without.Length), with, without)
+            : OfSortedKeys(new LongPlacementSums(with.Length, without.Length), with, without);
+
+    private static PlacementMoments OfLevels<TSums>(TSums sums, int[] with, int[] without, int levels)
+        where TSums : struct, IPlacementSums
     {
-        ulong n1 = (ulong)sample.WithCondition;
-        ulong below = 0;
-        ulong withSoFar = 0;
-        ulong sum = 0;
-        ulong squaresWith = 0;
-        ulong squaresWithout = 0;
-        ulong tied = 0;
-        int levels = sample.LevelCount;
         for (int i = 0; i < levels && i < with.Length && i < without.Length; i++)
         {
-            ulong w = (ulong)with[i];
-            ulong o = (ulong)without[i];
-            ulong u = (2 * below) + o;
-            ulong v = (2 * (n1 - withSoFar)) - w;
-            sum += w * u;
-            squaresWith += w * u * u;
-            squaresWithout += o * v * v;
-            tied += w * o;
-            below += o;
-            withSoFar += w;
+            sums.Add((ulong)with[i], (ulong)without[i]);
         }
 
-        return new PlacementMoments(sample.WithCondition, sample.WithoutCondition, sum, squaresWith, squaresWithout, tied);
+        return sums.ToMoments();
     }
 
-    private static PlacementMoments Narrow(ScoredSample sample, int[] with, int[] without)
+    // One subject a step, without a branch on which group it comes from; a level is added where the next key differs.
+    private static PlacementMoments OfSortedKeys<TSums>(TSums sums, ReadOnlySpan<ulong> with, ReadOnlySpan<ulong> without)
+        where TSums : struct, IPlacementSums
     {
-        ulong n1 = (ulong)sample.WithCondition;
-        ulong below = 0;
-        ulong withSoFar = 0;
-        WideSum sum = default;
-        WideSum squaresWith = default;
-        WideSum squaresWithout = default;
-        WideSum tied = default;
-        for (int i = 0; i < sample.LevelCount; i++)
+        int i = 0;
+        int j = 0;
+        ulong previous = ulong.MaxValue;
+        ulong levelWith = 0;
+        ulong levelWithout = 0;
+        while (i < with.Length && j < without.Length)
         {
-            // Below 2^31 subjects u and v are below 2^32, so u^2 fits, and w u fits.
-            ulong w = (ulong)with[i];
-            ulong o = (ulong)without[i];
-            ulong u = (2 * below) + o;
-            ulong v = (2 * (n1 - withSoFar)) - w;
-            sum.Add(w * u);
-            squaresWith.AddProduct(u * u, w);
-            squaresWithout.AddProduct(v * v, o);
-            tied.Add(w * o);
-            below += o;
-            withSoFar += w;
+            ulong left = with[i];
+            ulong right = without[j];
+            int fromWith = left <= right ? 1 : 0;
+            ulong key = left <= right ? left : right;
+            if (key != previous)
+            {
+                sums.Add(levelWith, levelWithout);
+                levelWith = 0;
+                levelWithout = 0;
+                previous = key;
+            }
+
+            levelWith += (ulong)fromWith;
+            levelWithout += (ulong)(1 - fromWith);
+            i += fromWith;
+            j += 1 - fromWith;
         }
 
-        return new PlacementMoments(
-            sample.WithCondition,
-            sample.WithoutCondition,
-            sum.ToBigInteger(),
-            squaresWith.ToBigInteger(),
-            squaresWithout.ToBigInteger(),
-            tied.ToBigInteger());
+        // What is left of one group: the part that ties with the last level, then all the rest, which meets nobody of the other.
+        int tiedWith = CountOf(previous, with.Slice(i));
+        int tiedWithout = CountOf(previous, without.Slice(j));
+        sums.Add(levelWith + (ulong)tiedWith, levelWithout + (ulong)tiedWithout);
+        sums.Add((ulong)(with.Length - i - tiedWith), (ulong)(without.Length - j - tiedWithout));
+        return sums.ToMoments();
+    }
+
+    private static int CountOf(ulong key, ReadOnlySpan<ulong> sorted)
+    {
+        int count = 0;
+        while (count < sorted.Length && sorted[count] == key)
+        {
+            count++;
+        }
+
+        return count;
     }
 
     // More than 2^31 subjects came as counts, so the levels are few.
-    private static PlacementMoments Wide(ScoredSample sample)
+    private static PlacementMoments OfWideCounts(ScoredSample sample)
     {
         BigInteger below = 0;
         BigInteger withSoFar = 0;

@@ -16,7 +16,7 @@ internal sealed class Placements
         Sample = sample;
         With = with;
         Without = without;
-        Area = new AreaUnderCurve(PlacementMoments.Of(sample));
+        Area = AreaUnderCurve.Of(sample);
     }
 
     public ScoredSample Sample { get; }

@@ -38,7 +38,7 @@ public sealed class RocCurve
         _truePositives = truePositives;
         _falsePositives = falsePositives;
         Points = new LazyList<OperatingPoint>(levels + 1, PointAt);
-        Area = new AreaUnderCurve(PlacementMoments.Of(sample));
+        Area = AreaUnderCurve.Of(sample);
     }
 
     /// <summary>Gets the sample the curve was made from.</summary>

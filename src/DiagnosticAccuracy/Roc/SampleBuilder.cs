@@ -10,7 +10,15 @@ namespace DiagnosticAccuracy.Roc;
 /// </remarks>
 internal static class SampleBuilder
 {
-    public static ScoredSample FromStatus(ReadOnlySpan<double> scores, ReadOnlySpan<bool> hasCondition, ScoreDirection direction)
+    public static ScoredSample FromStatus(ReadOnlySpan<double> scores, ReadOnlySpan<bool> hasCondition, ScoreDirection direction) =>
+        Sorted<LevelMaker, ScoredSample>(scores, hasCondition, direction);
+
+    /// <summary>The sums behind an area, without keeping a sample: all working memory goes back to its pool.</summary>
+    public static PlacementMoments MomentsOf(ReadOnlySpan<double> scores, ReadOnlySpan<bool> hasCondition, ScoreDirection direction) =>
+        Sorted<MomentMaker, PlacementMoments>(scores, hasCondition, direction);
+
+    private static TResult Sorted<TMaker, TResult>(ReadOnlySpan<double> scores, ReadOnlySpan<bool> hasCondition, ScoreDirection direction)
+        where TMaker : struct, ISortedGroupsMaker<TResult>
     {
         int n = scores.Length;
         ulong[] keys = ArrayPool<ulong>.Shared.Rent(n);
@@ -21,7 +29,7 @@ internal static class SampleBuilder
             int front = 0;
             int back = n - 1;
             bool anyNaN = false;
-            for (int i = 0; i < scores.Length; i++)
+            for (int i = 0; i < scores.Length && i < hasCondition.Length; i++)
             {
                 double score = scores[i];
                 anyNaN |= double.IsNaN(score);
@@ -38,7 +46,7 @@ internal static class SampleBuilder
                 RefuseNaN(scores, nameof(scores));
             }
 
-            return SortAndGroup(keys, n, front, direction);
+            return SortAndMake<TMaker, TResult>(keys, n, front, direction);
         }
         finally
         {
@@ -57,7 +65,7 @@ internal static class SampleBuilder
             ulong inversion = Inversion(direction);
             Fill(withCondition, keys.AsSpan(0, withCondition.Length), inversion);
             Fill(withoutCondition, keys.AsSpan(withCondition.Length, withoutCondition.Length), inversion);
-            return SortAndGroup(keys, n, withCondition.Length, direction);
+            return SortAndMake<LevelMaker, ScoredSample>(keys, n, withCondition.Length, direction);
         }
         finally
         {
@@ -144,7 +152,8 @@ internal static class SampleBuilder
         }
     }
 
-    private static ScoredSample SortAndGroup(ulong[] keys, int n, int withCondition, ScoreDirection direction)
+    private static TResult SortAndMake<TMaker, TResult>(ulong[] keys, int n, int withCondition, ScoreDirection direction)
+        where TMaker : struct, ISortedGroupsMaker<TResult>
     {
         ulong[] scratch = ArrayPool<ulong>.Shared.Rent(n);
         Span<ulong> with = keys.AsSpan(0, withCondition);
@@ -152,60 +161,92 @@ internal static class SampleBuilder
         RadixSort.Sort(with, scratch);
         RadixSort.Sort(without, scratch);
         ArrayPool<ulong>.Shared.Return(scratch);
-
-        double[] scores = new double[n];
-        int[] withCounts = new int[n];
-        int[] withoutCounts = new int[n];
-        int count = Merge(with, without, Inversion(direction), scores, withCounts, withoutCounts);
-        if (count < n)
-        {
-            Array.Resize(ref scores, count);
-            Array.Resize(ref withCounts, count);
-            Array.Resize(ref withoutCounts, count);
-        }
-
-        return new ScoredSample(
-            scores, new CountArray(withCounts), new CountArray(withoutCounts), count, withCondition, n - withCondition, direction);
+        return default(TMaker).Make(with, without, direction);
     }
 
-    // One subject a step, without a branch on which group it comes from; a new level begins where the key differs from the last.
-    private static int Merge(
-        ReadOnlySpan<ulong> with, ReadOnlySpan<ulong> without, ulong inversion, double[] scores, int[] withCounts, int[] withoutCounts)
+    /// <summary>What is made of the sorted keys of the two groups.</summary>
+    private interface ISortedGroupsMaker<TResult>
     {
-        int i = 0;
-        int j = 0;
-        int level = -1;
-        ulong previous = ulong.MaxValue;
-        while (i < with.Length && j < without.Length)
-        {
-            ulong left = with[i];
-            ulong right = without[j];
-            int fromWith = left <= right ? 1 : 0;
-            ulong key = left <= right ? left : right;
-            level += key != previous ? 1 : 0;
-            previous = key;
-            scores[level] = OrderedKey.ToDouble(key ^ inversion);
-            withCounts[level] += fromWith;
-            withoutCounts[level] += 1 - fromWith;
-            i += fromWith;
-            j += 1 - fromWith;
-        }
-
-        level = AppendRest(with.Slice(i), inversion, previous, level, scores, withCounts);
-        level = AppendRest(without.Slice(j), inversion, previous, level, scores, withoutCounts);
-        return level + 1;
+        TResult Make(ReadOnlySpan<ulong> with, ReadOnlySpan<ulong> without, ScoreDirection direction);
     }
 
-    private static int AppendRest(ReadOnlySpan<ulong> rest, ulong inversion, ulong previous, int level, double[] scores, int[] counts)
+    private readonly struct MomentMaker : ISortedGroupsMaker<PlacementMoments>
     {
-        foreach (ulong key in rest)
+        public PlacementMoments Make(ReadOnlySpan<ulong> with, ReadOnlySpan<ulong> without, ScoreDirection direction) =>
+            PlacementMoments.OfSortedKeys(with, without);
+    }
+
+    private readonly struct LevelMaker : ISortedGroupsMaker<ScoredSample>
+    {
+        public ScoredSample Make(ReadOnlySpan<ulong> with, ReadOnlySpan<ulong> without, ScoreDirection direction)
         {
-            level += key != previous ? 1 : 0;
-            previous = key;
-            scores[level] = OrderedKey.ToDouble(key ^ inversion);
-            counts[level]++;
+            int n = with.Length + without.Length;
+            double[] scores = UninitializedArray.Of<double>(n);
+            int[] withCounts = UninitializedArray.Of<int>(n);
+            int[] withoutCounts = UninitializedArray.Of<int>(n);
+            int count = Merge(with, without, Inversion(direction), scores, withCounts, withoutCounts);
+            if (count < n)
+            {
+                Array.Resize(ref scores, count);
+                Array.Resize(ref withCounts, count);
+                Array.Resize(ref withoutCounts, count);
+            }
+
+            return new ScoredSample(
+                scores, new CountArray(withCounts), new CountArray(withoutCounts), count, with.Length, without.Length, direction);
         }
 
-        return level;
+        // One subject a step, without a branch on which group it comes from; a new level begins where the key differs from the last.
+        private static int Merge(
+            ReadOnlySpan<ulong> with, ReadOnlySpan<ulong> without, ulong inversion, double[] scores, int[] withCounts, int[] withoutCounts)
+        {
+            int i = 0;
+            int j = 0;
+            int level = -1;
+            int levelWith = 0;
+            int levelWithout = 0;
+            ulong previous = ulong.MaxValue;
+            while (i < with.Length && j < without.Length)
+            {
+                ulong left = with[i];
+                ulong right = without[j];
+                int fromWith = left <= right ? 1 : 0;
+                ulong key = left <= right ? left : right;
+                int same = key == previous ? 1 : 0;
+                level += 1 - same;
+                levelWith = (levelWith * same) + fromWith;
+                levelWithout = (levelWithout * same) + 1 - fromWith;
+                previous = key;
+                scores[level] = OrderedKey.ToDouble(key ^ inversion);
+                withCounts[level] = levelWith;
+                withoutCounts[level] = levelWithout;
+                i += fromWith;
+                j += 1 - fromWith;
+            }
+
+            level = AppendRest(with.Slice(i), inversion, previous, level, scores, withCounts, withoutCounts);
+            level = AppendRest(without.Slice(j), inversion, previous, level, scores, withoutCounts, withCounts);
+            return level + 1;
+        }
+
+        private static int AppendRest(
+            ReadOnlySpan<ulong> rest, ulong inversion, ulong previous, int level, double[] scores, int[] counts, int[] otherCounts)
+        {
+            foreach (ulong key in rest)
+            {
+                if (key != previous)
+                {
+                    level++;
+                    scores[level] = OrderedKey.ToDouble(key ^ inversion);
+                    counts[level] = 0;
+                    otherCounts[level] = 0;
+                    previous = key;
+                }
+
+                counts[level]++;
+            }
+
+            return level;
+        }
     }
 }

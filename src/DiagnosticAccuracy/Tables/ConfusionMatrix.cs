@@ -59,6 +59,94 @@ public readonly record struct ConfusionMatrix
     /// <summary>Gets the negative share of those without the condition. Undefined when everybody has it.</summary>
     public Proportion Specificity => new(TrueNegatives, WithoutCondition, UndefinedReason.NoSubjectsWithoutCondition);
 
+    /// <summary>Gets the positive share of those without the condition, 1 - specificity. Undefined when everybody has it.</summary>
+    public Proportion FalsePositiveRate => new(FalsePositives, WithoutCondition, UndefinedReason.NoSubjectsWithoutCondition);
+
+    /// <summary>Gets the negative share of those with the condition, 1 - sensitivity. Undefined when nobody has it.</summary>
+    public Proportion FalseNegativeRate => new(FalseNegatives, WithCondition, UndefinedReason.NoSubjectsWithCondition);
+
+    /// <summary>
+    /// Gets the share of all subjects whose result is right. It mixes sensitivity and specificity in the proportion in which the groups were
+    /// enrolled, so it carries over to no other prevalence. Undefined when there are no subjects.
+    /// </summary>
+    public Proportion Accuracy => new(TruePositives + TrueNegatives, Total, UndefinedReason.NoSubjects);
+
+    /// <summary>
+    /// Gets the share of all subjects who have the condition: the prevalence of the sample. It is the prevalence of the intended users only when
+    /// the subjects were enrolled without regard to their status. Undefined when there are no subjects.
+    /// </summary>
+    public Proportion SamplePrevalence => new(WithCondition, Total, UndefinedReason.NoSubjects);
+
+    /// <summary>
+    /// Gets the Youden index, sensitivity + specificity - 1 (Youden, Cancer 1950;3:32), as the difference of the positive shares with and without
+    /// the condition; from -1 to 1, 0 for a test that tells nothing. It does not depend on the prevalence. Undefined when a group is empty.
+    /// </summary>
+    public ProportionDifference YoudenIndex => new(Sensitivity, FalsePositiveRate);
+
+    /// <summary>
+    /// Gets the positive likelihood ratio, sensitivity / (1 - specificity): by what the odds of the condition are multiplied by a positive result.
+    /// Positive infinity at a specificity of 1, with a finite lower limit. It does not depend on the prevalence. Undefined when a group is empty or
+    /// no result is positive.
+    /// </summary>
+    public ProportionRatio PositiveLikelihoodRatio => new(Sensitivity, FalsePositiveRate, UndefinedReason.NoPositiveResults);
+
+    /// <summary>
+    /// Gets the negative likelihood ratio, (1 - sensitivity) / specificity: by what the odds of the condition are multiplied by a negative result.
+    /// Zero at a sensitivity of 1, with an upper limit above zero. It does not depend on the prevalence. Undefined when a group is empty or no
+    /// result is negative.
+    /// </summary>
+    public ProportionRatio NegativeLikelihoodRatio => new(FalseNegativeRate, Specificity, UndefinedReason.NoNegativeResults);
+
+    /// <summary>
+    /// Gets the diagnostic odds ratio: the odds of a positive result with the condition over those without it (Glas et al., J Clin Epidemiol
+    /// 2003;56:1129). It does not depend on the prevalence. Undefined when a group is empty, or all results are alike.
+    /// </summary>
+    public OddsRatio DiagnosticOddsRatio => new(
+        Sensitivity, FalsePositiveRate, Positives == 0 ? UndefinedReason.NoPositiveResults : UndefinedReason.NoNegativeResults);
+
+    /// <summary>
+    /// Gets the predictive values straight from the table. They hold only for a cohort: subjects enrolled without regard to their status, at
+    /// the prevalence of this sample. In a case-control or enriched study they are the product of the enrolment; use
+    /// <see cref="PredictiveValuesAt"/> there.
+    /// </summary>
+    public CohortPredictiveValues CohortPredictiveValues => new(
+        new Proportion(TruePositives, Positives, UndefinedReason.NoPositiveResults),
+        new Proportion(TrueNegatives, Negatives, UndefinedReason.NoNegativeResults));
+
+    /// <summary>The table of two separate groups of subjects together, cell by cell.</summary>
+    /// <param name="left">One table.</param>
+    /// <param name="right">The table of other subjects.</param>
+    /// <returns>The sum.</returns>
+    /// <exception cref="OverflowException">The cells add up to more than <see cref="long.MaxValue"/>.</exception>
+    public static ConfusionMatrix operator +(ConfusionMatrix left, ConfusionMatrix right) => left.Add(right);
+
+    /// <summary>The table of these subjects and others together, cell by cell.</summary>
+    /// <param name="other">The table of other subjects.</param>
+    /// <returns>The sum.</returns>
+    /// <exception cref="OverflowException">The cells add up to more than <see cref="long.MaxValue"/>.</exception>
+    public ConfusionMatrix Add(ConfusionMatrix other) => checked(new(
+        TruePositives + other.TruePositives,
+        FalsePositives + other.FalsePositives,
+        FalseNegatives + other.FalseNegatives,
+        TrueNegatives + other.TrueNegatives));
+
+    /// <summary>The predictive values among people of whom a stated share has the condition.</summary>
+    /// <param name="prevalence">The prevalence among the people the test is meant for, taken as known.</param>
+    /// <returns>Both predictive values.</returns>
+    /// <remarks>Sensitivity and specificity are taken to be the same among those people as in this study.</remarks>
+    public PredictiveValues PredictiveValuesAt(Prevalence prevalence) => new(this, prevalence);
+
+    /// <summary>What the test is expected to do among so many people at a prevalence, as whole numbers that add up.</summary>
+    /// <param name="people">How many people are tested, 0 or more.</param>
+    /// <param name="prevalence">The share of them that has the condition.</param>
+    /// <returns>The expected cells; undefined, with the reason, when a group they need is empty.</returns>
+    /// <exception cref="ArgumentOutOfRangeException"><paramref name="people"/> is negative.</exception>
+    public ExpectedCells ExpectedFor(long people, Prevalence prevalence)
+    {
+        Guard.Count(people);
+        return new ExpectedCells(this, people, prevalence);
+    }
+
     /// <summary>The four cells in the invariant culture.</summary>
     /// <returns>For example "TP 90, FP 20, FN 10, TN 180".</returns>
     public override string ToString() =>

@@ -121,6 +121,18 @@ public class RocProperties
     }
 
     [Property]
+    public void The_area_without_a_sample_is_the_area_of_the_sample(SampleCase data)
+    {
+        AreaUnderCurve direct = AreaUnderCurve.FromScores(
+            [.. data.With, .. data.Without], [.. data.With.Select(_ => true), .. data.Without.Select(_ => false)], data.Direction);
+        AreaUnderCurve area = AreaUnderCurve.Of(data.Sample());
+        Assert.Equal(area.Value, direct.Value);
+        Assert.Equal(area.Variance, direct.Variance);
+        Assert.Equal(area.ConcordantPairs, direct.ConcordantPairs);
+        Assert.Equal(area.TiedPairs, direct.TiedPairs);
+    }
+
+    [Property]
     public void Negated_scores_with_the_other_direction_change_nothing(SampleCase data)
     {
         ScoreDirection opposite = data.Direction == ScoreDirection.HigherIsPositive ? ScoreDirection.LowerIsPositive : ScoreDirection.HigherIsPositive;

@@ -10,6 +10,7 @@ public class ScoredSampleTests
         ArgumentException[] errors =
         [
             Assert.Throws<ArgumentException>(() => ScoredSample.Create([1, 2, double.NaN, double.NaN], [true, false, true, false], Higher)),
+            Assert.Throws<ArgumentException>(() => AreaUnderCurve.FromScores([1, 2, double.NaN], [true, false, true], Higher)),
             Assert.Throws<ArgumentException>(() => ScoredSample.FromGroups([1], [1, 2, double.NaN], Higher)),
             Assert.Throws<ArgumentException>(() => ScoredSample.FromGroups([1, 2, double.NaN], [1], Higher)),
             Assert.Throws<ArgumentException>(() => ScoredSample.FromCounts([1, 2, double.NaN], [1, 1, 1], [1, 1, 1], Higher)),
@@ -17,7 +18,7 @@ public class ScoredSampleTests
             Assert.Throws<ArgumentException>(() => PairedScores.Create([1, 2, 3], Higher, [1, 2, double.NaN], Higher, [true, false, true])),
         ];
         Assert.All(errors, e => Assert.Contains("NaN at index 2", e.Message, StringComparison.Ordinal));
-        Assert.Equal(["scores", "withoutCondition", "withCondition", "levels", "score", "secondScores"], errors.Select(e => e.ParamName));
+        Assert.Equal(["scores", "scores", "withoutCondition", "withCondition", "levels", "score", "secondScores"], errors.Select(e => e.ParamName));
     }
 
     [Fact]
