@@ -38,16 +38,19 @@ public class NewcombeDifferenceTests
     }
 
     [Fact]
-    public void Every_recomputed_limit_agrees_to_ten_digits()
+    public void Every_recomputed_limit_agrees_as_far_as_it_is_good()
     {
         IReadOnlyList<IReadOnlyDictionary<string, string>> rows = ReferenceData.Csv("differences-independent.csv");
         Assert.Equal(72, rows.Count);
         foreach (IReadOnlyDictionary<string, string> row in rows)
         {
-            // The file holds limits of the Wald kind outside of -1 to 1; the library cuts them there.
+            // The file holds limits of the Wald kind outside of -1 to 1; the library cuts them there. Its own score limits are good to 8.4e-10
+            // only: 9/10 - 3/10 has .17002501671 for the Miettinen-Nurminen limit that is .170025016424398 on 110 digits. The same pairs
+            // at full accuracy are in proportions/fixtures.csv.
+            double tolerance = row["method(Newcombe number)"] is "mee(5)" or "miettinen_nurminen(6)" ? 9e-10 : 1e-10;
             ConfidenceInterval interval = Interval(row);
-            Assert.Equal(Math.Clamp(row.Number("lower"), -1, 1), interval.Lower, 1e-10);
-            Assert.Equal(Math.Clamp(row.Number("upper"), -1, 1), interval.Upper, 1e-10);
+            Assert.Equal(Math.Clamp(row.Number("lower"), -1, 1), interval.Lower, tolerance);
+            Assert.Equal(Math.Clamp(row.Number("upper"), -1, 1), interval.Upper, tolerance);
         }
     }
 

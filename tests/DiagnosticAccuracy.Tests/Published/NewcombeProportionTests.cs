@@ -41,7 +41,7 @@ public class NewcombeProportionTests
     public void Every_recomputed_limit_agrees_to_ten_digits()
     {
         IReadOnlyList<IReadOnlyDictionary<string, string>> rows = ReferenceData.Csv("proportions.csv");
-        Assert.Equal(117, rows.Count);
+        Assert.Equal(126, rows.Count);
         Assert.Equal(Enum.GetValues<ProportionMethod>().Length, rows.Select(r => r["method"]).Distinct().Count());
         foreach (IReadOnlyDictionary<string, string> row in rows)
         {
