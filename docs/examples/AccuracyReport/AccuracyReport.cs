@@ -21,9 +21,7 @@ public static class AccuracyReport
         {
             if (args.Count == 0)
             {
-                StudyDesign demo = DemoStudy.Design();
-                Statement.Write(demo, StudyReader.Read(demo), output);
-                return 0;
+                return Report(DemoStudy.Design(), output);
             }
 
             ReportCommand command = new();
@@ -40,9 +38,7 @@ public static class AccuracyReport
                 throw new StudyException(parsed.Errors[0].Message);
             }
 
-            StudyDesign design = command.Design(parsed);
-            Statement.Write(design, StudyReader.Read(design), output);
-            return 0;
+            return Report(command.Design(parsed), output);
         }
         catch (Exception exception) when (exception is StudyException or IOException or UnauthorizedAccessException or ArgumentException)
         {
@@ -51,5 +47,14 @@ public static class AccuracyReport
             error.WriteLine("error: " + (parameter < 0 ? message : message[..parameter]));
             return Failed;
         }
+    }
+
+    // The statement comes out whole or not at all.
+    private static int Report(StudyDesign design, TextWriter output)
+    {
+        using StringWriter statement = new() { NewLine = output.NewLine };
+        Statement.Write(design, StudyReader.Read(design), statement);
+        output.Write(statement.ToString());
+        return 0;
     }
 }
