@@ -16,9 +16,9 @@ internal readonly struct BetaKernel
     /// <summary>The finite sum of an integer shape is used up to this number of terms.</summary>
     private const double FiniteSumLargest = 100.0;
 
-    private readonly double a;
-    private readonly double b;
-    private readonly double scale;
+    private readonly double _a;
+    private readonly double _b;
+    private readonly double _scale;
 
     /// <summary>Initializes the distribution.</summary>
     /// <param name="a">The first shape, positive.</param>
@@ -28,29 +28,29 @@ internal readonly struct BetaKernel
     /// </remarks>
     public BetaKernel(double a, double b)
     {
-        this.a = a;
-        this.b = b;
+        _a = a;
+        _b = b;
         double n = a + b;
         double least = Math.Min(a, b) * (Math.Max(a, b) / n);
-        scale = Math.Sqrt(least / TwoPi)
+        _scale = Math.Sqrt(least / TwoPi)
             * Math.Exp(StirlingSeries.StirlingError(n) - StirlingSeries.StirlingError(a) - StirlingSeries.StirlingError(b));
     }
 
     /// <summary>Gets the first shape.</summary>
-    public double A => a;
+    public double A => _a;
 
     /// <summary>Gets the second shape.</summary>
-    public double B => b;
+    public double B => _b;
 
     /// <summary>Gets ln(a B(a,b)), the logarithm of the divisor of x^a in the leading term of the lower tail.</summary>
     public double LogLeadingDivisor
     {
         get
         {
-            double n = a + b;
-            double logX0 = a < b ? Math.Log(a / n) : -ElementaryFunctions.Log1P(b / a);
-            double logY0 = b < a ? Math.Log(b / n) : -ElementaryFunctions.Log1P(a / b);
-            return (a * logX0) + (b * logY0) - Math.Log(scale / a);
+            double n = _a + _b;
+            double logX0 = _a < _b ? Math.Log(_a / n) : -ElementaryFunctions.Log1P(_b / _a);
+            double logY0 = _b < _a ? Math.Log(_b / n) : -ElementaryFunctions.Log1P(_a / _b);
+            return (_a * logX0) + (_b * logY0) - Math.Log(_scale / _a);
         }
     }
 
@@ -59,32 +59,32 @@ internal readonly struct BetaKernel
     /// <returns>The tails, the slope and its logarithmic derivative.</returns>
     public BetaEvaluation Evaluate(UnitPoint point)
     {
-        DoubleDouble deviation = BinomialExponent.Deviation(a, b, point);
-        double slope = scale * BinomialExponent.Exp(a, b, point, deviation);
+        DoubleDouble deviation = BinomialExponent.Deviation(_a, _b, point);
+        double slope = _scale * BinomialExponent.Exp(_a, _b, point, deviation);
         double lambda = -deviation.High;
 
-        if (a < 1.0 && b < 1.0)
+        if (_a < 1.0 && _b < 1.0)
         {
-            BetaTails tails = point.IsLow ? SeriesTails(a, b, point.X) : Swap(SeriesTails(b, a, point.Complement));
+            BetaTails tails = point.IsLow ? SeriesTails(_a, _b, point.X) : Swap(SeriesTails(_b, _a, point.Complement));
             return new BetaEvaluation(tails.Lower, tails.Upper, slope, lambda);
         }
 
         bool fromBelow;
-        if (a < 1.0)
+        if (_a < 1.0)
         {
-            if (point.IsLow && b * point.X <= 1.0)
+            if (point.IsLow && _b * point.X <= 1.0)
             {
-                BetaTails tails = SeriesTails(a, b, point.X);
+                BetaTails tails = SeriesTails(_a, _b, point.X);
                 return new BetaEvaluation(tails.Lower, tails.Upper, slope, lambda);
             }
 
             fromBelow = false;
         }
-        else if (b < 1.0)
+        else if (_b < 1.0)
         {
-            if (!point.IsLow && a * point.Complement <= 1.0)
+            if (!point.IsLow && _a * point.Complement <= 1.0)
             {
-                BetaTails tails = Swap(SeriesTails(b, a, point.Complement));
+                BetaTails tails = Swap(SeriesTails(_b, _a, point.Complement));
                 return new BetaEvaluation(tails.Lower, tails.Upper, slope, lambda);
             }
 
@@ -98,11 +98,11 @@ internal readonly struct BetaKernel
 
         if (fromBelow)
         {
-            double lower = slope * TailOverSlope(a, b, point.X, point.Complement, lambda);
+            double lower = slope * TailOverSlope(_a, _b, point.X, point.Complement, lambda);
             return new BetaEvaluation(lower, 1.0 - lower, slope, lambda);
         }
 
-        double upper = slope * TailOverSlope(b, a, point.Complement, point.X, -lambda);
+        double upper = slope * TailOverSlope(_b, _a, point.Complement, point.X, -lambda);
         return new BetaEvaluation(1.0 - upper, upper, slope, lambda);
     }
 

@@ -139,10 +139,10 @@ internal static class RootFinding
 
     private readonly struct DelegateFunction : IFunction
     {
-        private readonly Func<double, double> f;
+        private readonly Func<double, double> _function;
 
-        public DelegateFunction(Func<double, double> f) => this.f = f;
+        public DelegateFunction(Func<double, double> function) => _function = function;
 
-        public double Value(double x) => f(x);
+        public double Value(double x) => _function(x);
     }
 }
