@@ -11,7 +11,7 @@ namespace DiagnosticAccuracy.Proportions;
 internal readonly struct DifferenceScore(Proportion first, Proportion second, double varianceFactor)
 {
     /// <summary>Gets the observed difference.</summary>
-    public double Estimate => first.Value - second.Value;
+    public double Estimate => ProportionDifference.Between(first, second);
 
     /// <summary>The statistic; 0 where the observed difference is d, whatever the variance.</summary>
     public double Statistic(double difference)
@@ -25,8 +25,7 @@ internal readonly struct DifferenceScore(Proportion first, Proportion second, do
         double n2 = second.Trials;
         double f1 = first.Failures;
         double f2 = second.Failures;
-        double observed = first.Value > 0.5 && second.Value > 0.5 ? (f2 / n2) - (f1 / n1) : first.Value - second.Value;
-        double excess = observed - difference;
+        double excess = Estimate - difference;
         if (excess == 0)
         {
             return 0;

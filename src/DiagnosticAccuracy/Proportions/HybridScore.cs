@@ -19,11 +19,15 @@ internal readonly struct HybridScore(ProportionDifference difference, double cor
 
     public double Upper(double z) => difference.Value + Reach(difference.Second, difference.First, z);
 
-    // How far the one proportion may lie below, and the other above.
+    // How far the one proportion may lie below, and the other above; of large proportions by their failures, which keep their digits.
     private double Reach(Proportion below, Proportion above, double z)
     {
-        double down = below.Value - WilsonScore.SmallerRoot(below, z, correction);
-        double up = WilsonScore.LargerRoot(above, z, correction) - above.Value;
+        double down = below.Value > 0.5 ? Above(below.Complement, z) : Below(below, z);
+        double up = above.Value > 0.5 ? Below(above.Complement, z) : Above(above, z);
         return Math.Sqrt((down * down) + (up * up));
     }
+
+    private double Below(Proportion proportion, double z) => proportion.Value - WilsonScore.SmallerRoot(proportion, z, correction);
+
+    private double Above(Proportion proportion, double z) => WilsonScore.LargerRoot(proportion, z, correction) - proportion.Value;
 }

@@ -28,7 +28,7 @@ public readonly record struct ProportionDifference : IIntervalQuantity
     public bool IsDefined => First.IsDefined && Second.IsDefined;
 
     /// <summary>Gets the first proportion minus the second, from -1 to 1; NaN exactly when one of them has no trials.</summary>
-    public double Value => First.Value - Second.Value;
+    public double Value => Between(First, Second);
 
     /// <inheritdoc/>
     public UndefinedReason? WhyUndefined => First.WhyUndefined ?? Second.WhyUndefined;
@@ -66,4 +66,9 @@ public readonly record struct ProportionDifference : IIntervalQuantity
         string counts = $"{First.Counts} - {Second.Counts}";
         return IsDefined ? $"{counts} = {Display.Of(Value)}" : $"{counts} ({Display.Undefined(WhyUndefined!)})";
     }
+
+    /// <summary>The difference; of two large proportions by their failures, so that it keeps its digits.</summary>
+    internal static double Between(Proportion first, Proportion second) => first.Value > 0.5 && second.Value > 0.5
+        ? second.Complement.Value - first.Complement.Value
+        : first.Value - second.Value;
 }

@@ -50,7 +50,7 @@ internal readonly struct ScoreDifference(ProportionDifference difference, double
         }
         while (high < 1 && f.Value(high) > 0);
 
-        return RootFinding.Find(f, low, high, RootFinding.DefaultRelativeAccuracy, 1e-18);
+        return RootFinding.Find(f, low, high, RootFinding.DefaultRelativeAccuracy, 1e-28);
     }
 
     private readonly struct DistanceToQuantile(DifferenceScore score, double z) : IFunction

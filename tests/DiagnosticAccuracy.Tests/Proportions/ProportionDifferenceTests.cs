@@ -115,6 +115,20 @@ public class ProportionDifferenceTests
         }
     }
 
+    /// <summary>The plain subtraction keeps five digits here, and a root sought to 1e-18 in absolute terms kept six.</summary>
+    [Fact]
+    public void Differences_of_proportions_near_1_keep_their_digits()
+    {
+        ProportionDifference difference = new(new Proportion(999_999_999_999, 1_000_000_000_000), new Proportion(999_999_999_990, 1_000_000_000_000));
+        Assert.Equal(9e-12, difference.Value, 9e-12 * 1e-14);
+        ProportionDifference failures = new(new Proportion(10, 1_000_000_000_000), new Proportion(1, 1_000_000_000_000));
+        foreach (DifferenceMethod method in new[] { DifferenceMethod.HybridScore, DifferenceMethod.Mee, DifferenceMethod.MiettinenNurminen, DifferenceMethod.Wald })
+        {
+            Assert.Equal(failures.Interval(default, method).Lower, difference.Interval(default, method).Lower, 1e-12 * 1e-10);
+            Assert.Equal(failures.Interval(default, method).Upper, difference.Interval(default, method).Upper, 1e-12 * 1e-10);
+        }
+    }
+
     [Fact]
     public void Margins_are_checked_and_show()
     {

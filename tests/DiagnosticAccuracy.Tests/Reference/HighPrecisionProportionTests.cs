@@ -14,8 +14,8 @@ public class HighPrecisionProportionTests
 
     [Theory]
     [InlineData("proportion", 141)]
-    [InlineData("ratio", 66)]
-    [InlineData("difference", 108)]
+    [InlineData("ratio", 78)]
+    [InlineData("difference", 120)]
     [InlineData("odds", 76)]
     public void Every_limit_agrees(string kind, int rows)
     {
@@ -30,7 +30,7 @@ public class HighPrecisionProportionTests
             }
         }
 
-        Assert.Empty(wrong);
+        Assert.True(wrong.Count == 0, string.Join("\n", wrong));
         Assert.Equal(rows, chosen.Length);
     }
 
