@@ -11,9 +11,9 @@ internal static class CurveSearch
         // with the same false positives.
         int points = curve.Sample.LevelCount + 1;
         double withCondition = curve.Sample.WithCondition;
-        int chosen = FirstFrom(0, points, i => curve.TruePositives[i] / withCondition >= target);
-        long falsePositives = curve.FalsePositives[chosen];
-        return curve.PointAt(FirstFrom(chosen, points, i => curve.FalsePositives[i] > falsePositives) - 1);
+        int chosen = FirstFrom(0, points, i => curve.TruePositives(i) / withCondition >= target);
+        long falsePositives = curve.FalsePositives(chosen);
+        return curve.PointAt(FirstFrom(chosen, points, i => curve.FalsePositives(i) > falsePositives) - 1);
     }
 
     public static OperatingPoint SpecificityAtLeast(RocCurve curve, double target)
@@ -22,9 +22,9 @@ internal static class CurveSearch
         int points = curve.Sample.LevelCount + 1;
         double withoutCondition = curve.Sample.WithoutCondition;
         long trueNegativesAtStart = curve.Sample.WithoutCondition;
-        int chosen = FirstFrom(0, points, i => (trueNegativesAtStart - curve.FalsePositives[i]) / withoutCondition < target) - 1;
-        long truePositives = curve.TruePositives[chosen];
-        return curve.PointAt(FirstFrom(0, points, i => curve.TruePositives[i] >= truePositives));
+        int chosen = FirstFrom(0, points, i => (trueNegativesAtStart - curve.FalsePositives(i)) / withoutCondition < target) - 1;
+        long truePositives = curve.TruePositives(chosen);
+        return curve.PointAt(FirstFrom(0, points, i => curve.TruePositives(i) >= truePositives));
     }
 
     public static IReadOnlyList<OperatingPoint> LargestYoudenIndex(RocCurve curve)
@@ -34,8 +34,8 @@ internal static class CurveSearch
         long n1 = curve.Sample.WithCondition;
         long n0 = curve.Sample.WithoutCondition;
         List<int> best = curve.Sample.Total <= int.MaxValue
-            ? WhereLargest(points, i => (curve.TruePositives[i] * n0) - (curve.FalsePositives[i] * n1))
-            : WhereLargest(points, i => ((BigInteger)curve.TruePositives[i] * n0) - ((BigInteger)curve.FalsePositives[i] * n1));
+            ? WhereLargest(points, i => (curve.TruePositives(i) * n0) - (curve.FalsePositives(i) * n1))
+            : WhereLargest(points, i => ((BigInteger)curve.TruePositives(i) * n0) - ((BigInteger)curve.FalsePositives(i) * n1));
         return best.ConvertAll(curve.PointAt);
     }
 

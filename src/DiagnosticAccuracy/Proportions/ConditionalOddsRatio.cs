@@ -59,7 +59,7 @@ internal static class ConditionalOddsRatio
     }
 
     // Newton on the logit of the tail, which rises with the logarithm of the odds ratio, kept within what is known.
-    private static double BySummation(FourCells cells, double z, double target, double share)
+    internal static double BySummation(FourCells cells, double z, double target, double share)
     {
         FourCells smoothed = new(cells.A + 0.5, cells.B + 0.5, cells.C + 0.5, cells.D + 0.5);
         double spread = 1 / smoothed.Deviation;
@@ -88,15 +88,16 @@ internal static class ConditionalOddsRatio
             double slope = up.SlopePlus(share) + down.SlopePlus(1 - share);
             double step = slope > 0 ? -excess / slope : -Math.Sign(excess) * LongestStep;
             step = Math.Min(LongestStep, Math.Max(-LongestStep, step));
+            if (Math.Abs(step) <= Math.Max(1e-10 * Math.Min(1, spread), 2e-16 * Math.Abs(x)))
+            {
+                // What is left after such a step is of the order of its square.
+                return x + step;
+            }
+
             double next = x + step;
             if (!(next > below && next < above))
             {
-                next = double.IsInfinity(below) || double.IsInfinity(above) ? x + step : below + ((above - below) / 2);
-            }
-
-            if (Math.Abs(next - x) <= Math.Max(1e-10 * Math.Min(1, spread), 2e-16 * Math.Abs(x)))
-            {
-                return next;
+                next = double.IsInfinity(below) || double.IsInfinity(above) ? next : below + ((above - below) / 2);
             }
 
             x = next;
@@ -109,7 +110,7 @@ internal static class ConditionalOddsRatio
     /// The limit for large cells: the distribution is normal with the variance 1/(1/A+1/B+1/C+1/D) of the cells expected under the
     /// limit, corrected for discreteness, for the distance of mean and mode, and for the skewness.
     /// </summary>
-    private static double ByExpansion(FourCells cells, double z, double share)
+    internal static double ByExpansion(FourCells cells, double z, double share)
     {
         double correction = share - 0.5;
         double shift = z * cells.Deviation;

@@ -61,19 +61,27 @@ public readonly record struct Proportion : IIntervalQuantity
     /// <inheritdoc/>
     ConfidenceInterval IIntervalQuantity.Interval(Confidence confidence) => Interval(confidence);
 
-    /// <summary>A confidence interval; it lies within 0 to 1, and contains the value.</summary>
+    /// <summary>A confidence interval; it lies within 0 to 1, and at every two-sided level from one half on contains the value.</summary>
     /// <param name="confidence">Level and side; two-sided 95 % unless said.</param>
     /// <param name="method">The method; Wilson's score interval unless said.</param>
     /// <returns>The interval; undefined, with the reason, for 0 of 0.</returns>
     /// <exception cref="ArgumentOutOfRangeException"><paramref name="method"/> is not a value of its type.</exception>
     /// <remarks>
-    /// Sources: Wilson, J Am Stat Assoc 1927; Clopper and Pearson, Biometrika 1934; compared by Newcombe, Stat Med 1998;17:857.
-    /// A one-sided interval uses the same limit at the whole error probability and has 0 or 1 on its other side.
+    /// A one-sided interval uses the same limit at the whole error probability and has 0 or 1 on its other side. Sources: Wilson, J Am Stat Assoc
+    /// 1927;22:209; Clopper and Pearson, Biometrika 1934;26:404; Agresti and Coull, Am Stat 1998;52:119; Brown, Cai and DasGupta, Stat
+    /// Sci 2001;16:101; compared by Newcombe, Stat Med 1998;17:857.
     /// </remarks>
     public ConfidenceInterval Interval(Confidence confidence = default, ProportionMethod method = ProportionMethod.Wilson) => method switch
     {
         ProportionMethod.Wilson => WilsonScore.Interval(this, confidence),
         ProportionMethod.ClopperPearson => ClopperPearson.Interval(this, confidence),
+        ProportionMethod.MidP => MidP.Interval(this, confidence),
+        ProportionMethod.Jeffreys => Jeffreys.Interval(this, confidence),
+        ProportionMethod.AgrestiCoull => AgrestiCoull.Interval(this, confidence),
+        ProportionMethod.LikelihoodRatio => LikelihoodRatioInterval.Interval(this, confidence),
+        ProportionMethod.WilsonContinuity => WilsonScore.WithContinuity(this, confidence),
+        ProportionMethod.Wald => Wald.Interval(this, confidence),
+        ProportionMethod.WaldContinuity => Wald.WithContinuity(this, confidence),
         _ => throw Guard.UnknownOption(method),
     };
 

@@ -28,7 +28,7 @@ public readonly record struct ProportionDifference : IIntervalQuantity
     public bool IsDefined => First.IsDefined && Second.IsDefined;
 
     /// <summary>Gets the first proportion minus the second, from -1 to 1; NaN exactly when one of them has no trials.</summary>
-    public double Value => First.Value - Second.Value;
+    public double Value => Between(First, Second);
 
     /// <inheritdoc/>
     public UndefinedReason? WhyUndefined => First.WhyUndefined ?? Second.WhyUndefined;
@@ -41,10 +41,21 @@ public readonly record struct ProportionDifference : IIntervalQuantity
     /// <param name="method">The method; the hybrid of two Wilson score intervals unless said.</param>
     /// <returns>The interval; undefined, with the reason, where the difference is.</returns>
     /// <exception cref="ArgumentOutOfRangeException"><paramref name="method"/> is not a value of its type.</exception>
-    /// <remarks>Source: Newcombe, Stat Med 1998;17:873.</remarks>
+    /// <remarks>
+    /// The score and hybrid intervals contain the difference at every level above one half. Sources: Newcombe, Stat Med 1998;17:873; Miettinen
+    /// and Nurminen, Stat Med 1985;4:213; Mee, Biometrics 1984;40:1175; Beal, Biometrics 1987;43:941; Agresti and Caffo, Am Stat 2000;54:280.
+    /// </remarks>
     public ConfidenceInterval Interval(Confidence confidence = default, DifferenceMethod method = DifferenceMethod.HybridScore) => method switch
     {
         DifferenceMethod.HybridScore => HybridScore.Interval(this, confidence),
+        DifferenceMethod.MiettinenNurminen => ScoreDifference.MiettinenNurminen(this, confidence),
+        DifferenceMethod.Mee => ScoreDifference.Mee(this, confidence),
+        DifferenceMethod.HybridScoreContinuity => HybridScore.WithContinuity(this, confidence),
+        DifferenceMethod.AgrestiCaffo => WaldDifference.AgrestiCaffo(this, confidence),
+        DifferenceMethod.Haldane => BealDifference.Haldane(this, confidence),
+        DifferenceMethod.JeffreysPerks => BealDifference.JeffreysPerks(this, confidence),
+        DifferenceMethod.Wald => WaldDifference.Interval(this, confidence),
+        DifferenceMethod.WaldContinuity => WaldDifference.WithContinuity(this, confidence),
         _ => throw Guard.UnknownOption(method),
     };
 
@@ -55,4 +66,9 @@ public readonly record struct ProportionDifference : IIntervalQuantity
         string counts = $"{First.Counts} - {Second.Counts}";
         return IsDefined ? $"{counts} = {Display.Of(Value)}" : $"{counts} ({Display.Undefined(WhyUndefined!)})";
     }
+
+    /// <summary>The difference; of two large proportions by their failures, so that it keeps its digits.</summary>
+    internal static double Between(Proportion first, Proportion second) => first.Value > 0.5 && second.Value > 0.5
+        ? second.Complement.Value - first.Complement.Value
+        : first.Value - second.Value;
 }

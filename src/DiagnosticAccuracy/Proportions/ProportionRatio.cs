@@ -63,20 +63,23 @@ public readonly record struct ProportionRatio : IIntervalQuantity
     /// <inheritdoc/>
     ConfidenceInterval IIntervalQuantity.Interval(Confidence confidence) => Interval(confidence);
 
-    /// <summary>A confidence interval; it lies within 0 to infinity, and contains the value at every level above one half.</summary>
+    /// <summary>A confidence interval; it lies within 0 to infinity.</summary>
     /// <param name="confidence">Level and side; two-sided 95 % unless said.</param>
     /// <param name="method">The method; normal on the logarithm unless said.</param>
     /// <returns>The interval; undefined, with the reason, where the ratio is.</returns>
     /// <exception cref="ArgumentOutOfRangeException"><paramref name="method"/> is not a value of its type.</exception>
     /// <remarks>
-    /// An empty cell gives a ratio of zero or infinity, with a finite limit on the other side; nothing is added to the counts.
-    /// Sources: Katz, Baptista, Azen and Pike, Biometrics 1978;34:469; Simel, Samsa and Matchar, J Clin Epidemiol 1991;44:763;
-    /// Koopman, Biometrics 1984;40:513.
+    /// An empty cell gives a ratio of zero or infinity, with a finite limit on the other side; nothing is added to the counts unless asked
+    /// for by <see cref="RatioMethod.LogAddHalf"/>. All other methods contain the ratio at every level above one half. Sources: Katz, Baptista,
+    /// Azen and Pike, Biometrics 1978;34:469; Simel, Samsa and Matchar, J Clin Epidemiol 1991;44:763; Koopman, Biometrics 1984;40:513;
+    /// Miettinen and Nurminen, Stat Med 1985;4:213.
     /// </remarks>
     public ConfidenceInterval Interval(Confidence confidence = default, RatioMethod method = RatioMethod.Log) => method switch
     {
         RatioMethod.Log => LogRatio.Interval(this, confidence),
         RatioMethod.Koopman => ScoreRatio.Koopman(this, confidence),
+        RatioMethod.MiettinenNurminen => ScoreRatio.MiettinenNurminen(this, confidence),
+        RatioMethod.LogAddHalf => LogRatio.AddHalf(this, confidence),
         _ => throw Guard.UnknownOption(method),
     };
 

@@ -3,16 +3,23 @@ using DiagnosticAccuracy.Numerics;
 namespace DiagnosticAccuracy.Proportions;
 
 /// <summary>All ratios of two independent proportions that the score test does not reject.</summary>
-/// <remarks>Koopman, Biometrics 1984;40:513; Gart and Nam, Biometrics 1988;44:323.</remarks>
+/// <remarks>Koopman, Biometrics 1984;40:513; Gart and Nam, Biometrics 1988;44:323; Miettinen and Nurminen, Stat Med 1985;4:213.</remarks>
 internal readonly struct ScoreRatio : INormalLimits
 {
     public const string KoopmanName = "score (Koopman)";
+    public const string MiettinenNurminenName = "score (Miettinen-Nurminen)";
 
     private readonly RatioScore _score;
 
     private ScoreRatio(RatioScore score) => _score = score;
 
     public static ConfidenceInterval Koopman(ProportionRatio ratio, Confidence confidence) => Interval(ratio, confidence, 1, KoopmanName);
+
+    public static ConfidenceInterval MiettinenNurminen(ProportionRatio ratio, Confidence confidence)
+    {
+        double total = (double)ratio.Numerator.Trials + ratio.Denominator.Trials;
+        return Interval(ratio, confidence, total / (total - 1), MiettinenNurminenName);
+    }
 
     public static ConfidenceInterval Interval(ProportionRatio ratio, Confidence confidence, double varianceFactor, string name) =>
         ratio.IsDefined

@@ -31,12 +31,16 @@ internal readonly record struct PlacementMoments(
             ? OfSortedKeys(new ShortPlacementSums(with.Length, without.Length), with, without)
             : OfSortedKeys(new LongPlacementSums(with.Length, without.Length), with, without);
 
-    private static PlacementMoments OfLevels<TSums>(TSums sums, int[] with, int[] without, int levels)
+    private static PlacementMoments OfLevels<TSums>(TSums sums, int[] withThrough, int[] withoutThrough, int levels)
         where TSums : struct, IPlacementSums
     {
-        for (int i = 0; i < levels && i < with.Length && i < without.Length; i++)
+        int with = 0;
+        int without = 0;
+        for (int i = 0; i < levels && i < withThrough.Length && i < withoutThrough.Length; i++)
         {
-            sums.Add((ulong)with[i], (ulong)without[i]);
+            sums.Add((ulong)(withThrough[i] - with), (ulong)(withoutThrough[i] - without));
+            with = withThrough[i];
+            without = withoutThrough[i];
         }
 
         return sums.ToMoments();
@@ -101,8 +105,8 @@ internal readonly record struct PlacementMoments(
         BigInteger tied = 0;
         for (int i = 0; i < sample.LevelCount; i++)
         {
-            BigInteger w = sample.With[i];
-            BigInteger o = sample.Without[i];
+            BigInteger w = sample.With.At(i);
+            BigInteger o = sample.Without.At(i);
             BigInteger u = (2 * below) + o;
             BigInteger v = (2 * (sample.WithCondition - withSoFar)) - w;
             sum += w * u;

@@ -83,8 +83,8 @@ internal sealed class Placements
         long[] with = new long[withCount];
         long[] without = new long[withoutCount];
         double[] scores = new double[n];
-        int[] withCounts = new int[n];
-        int[] withoutCounts = new int[n];
+        int[] withThrough = new int[n];
+        int[] withoutThrough = new int[n];
         long withSoFar = 0;
         long withoutSoFar = 0;
         int levels = 0;
@@ -116,19 +116,19 @@ internal sealed class Placements
             }
 
             scores[levels] = OrderedKey.ToDouble(keys[start] ^ inversion);
-            withCounts[levels] = tiedWith;
-            withoutCounts[levels] = tiedWithout;
-            levels++;
             withSoFar += tiedWith;
             withoutSoFar += tiedWithout;
+            withThrough[levels] = (int)withSoFar;
+            withoutThrough[levels] = (int)withoutSoFar;
+            levels++;
             start = end;
         }
 
         Array.Resize(ref scores, levels);
-        Array.Resize(ref withCounts, levels);
-        Array.Resize(ref withoutCounts, levels);
+        Array.Resize(ref withThrough, levels);
+        Array.Resize(ref withoutThrough, levels);
         ScoredSample sample = new(
-            scores, new CountArray(withCounts), new CountArray(withoutCounts), levels, withCount, withoutCount, direction);
+            scores, new CumulativeCounts(withThrough), new CumulativeCounts(withoutThrough), levels, withCount, withoutCount, direction);
         return new Placements(sample, with, without);
     }
 

@@ -11,33 +11,10 @@ namespace DiagnosticAccuracy;
 /// </remarks>
 public sealed class RocCurve
 {
-    private readonly CountArray _truePositives;
-    private readonly CountArray _falsePositives;
-
     private RocCurve(ScoredSample sample)
     {
         Sample = sample;
-        int levels = sample.LevelCount;
-        CountArray truePositives = CountArray.Create(levels + 1, sample.Total);
-        CountArray falsePositives = CountArray.Create(levels + 1, sample.Total);
-        if (truePositives.Narrow is { } narrowTrue && falsePositives.Narrow is { } narrowFalse
-            && sample.With.Narrow is { } with && sample.Without.Narrow is { } without)
-        {
-            Accumulate(with, narrowTrue);
-            Accumulate(without, narrowFalse);
-        }
-        else
-        {
-            for (int i = 0; i < levels; i++)
-            {
-                truePositives.Set(i + 1, truePositives[i] + sample.With[levels - 1 - i]);
-                falsePositives.Set(i + 1, falsePositives[i] + sample.Without[levels - 1 - i]);
-            }
-        }
-
-        _truePositives = truePositives;
-        _falsePositives = falsePositives;
-        Points = new LazyList<OperatingPoint>(levels + 1, PointAt);
+        Points = new LazyList<OperatingPoint>(sample.LevelCount + 1, PointAt);
         Area = AreaUnderCurve.Of(sample);
     }
 
@@ -82,9 +59,11 @@ public sealed class RocCurve
     /// <returns>The text, in the invariant culture.</returns>
     public override string ToString() => $"{Display.Of(Points.Count)} points, area {Area}";
 
-    internal CountArray TruePositives => _truePositives;
+    /// <summary>The true positives when so many levels, counted from the most positive one, are positive.</summary>
+    internal long TruePositives(int levelsPositive) => Sample.WithCondition - Sample.With.Below(Sample.LevelCount - levelsPositive);
 
-    internal CountArray FalsePositives => _falsePositives;
+    /// <summary>The false positives when so many levels, counted from the most positive one, are positive.</summary>
+    internal long FalsePositives(int levelsPositive) => Sample.WithoutCondition - Sample.Without.Below(Sample.LevelCount - levelsPositive);
 
     /// <summary>The point at which so many levels, counted from the most positive one, are positive.</summary>
     internal OperatingPoint PointAt(int levelsPositive) => new(
@@ -93,21 +72,10 @@ public sealed class RocCurve
             : Cutoff.At(Sample.Scores[Sample.LevelCount - levelsPositive], Sample.Direction),
         TableAt(levelsPositive));
 
-    private static void Accumulate(int[] counts, int[] cumulative)
-    {
-        int sum = 0;
-        int levels = cumulative.Length - 1;
-        for (int i = 0; i < levels; i++)
-        {
-            sum += counts[levels - 1 - i];
-            cumulative[i + 1] = sum;
-        }
-    }
-
     private ConfusionMatrix TableAt(int levelsPositive)
     {
-        long truePositives = _truePositives[levelsPositive];
-        long falsePositives = _falsePositives[levelsPositive];
+        long truePositives = TruePositives(levelsPositive);
+        long falsePositives = FalsePositives(levelsPositive);
         return new ConfusionMatrix(
             truePositives, falsePositives, Sample.WithCondition - truePositives, Sample.WithoutCondition - falsePositives);
     }

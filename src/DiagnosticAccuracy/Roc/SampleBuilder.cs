@@ -101,12 +101,13 @@ internal static class SampleBuilder
 
         RadixSort.Sort(keys, order, new ulong[n], new int[n]);
         double[] scores = new double[n];
-        long[] with = new long[n];
-        long[] without = new long[n];
+        long[] withThrough = new long[n];
+        long[] withoutThrough = new long[n];
+        long withSoFar = 0;
+        long withoutSoFar = 0;
         int last = -1;
-        for (int i = 0; i < n; i++)
+        foreach (int level in order)
         {
-            int level = order[i];
             if (withCondition[level] == 0 && withoutCondition[level] == 0)
             {
                 continue;
@@ -118,21 +119,20 @@ internal static class SampleBuilder
                 scores[++last] = score;
             }
 
-            with[last] += withCondition[level];
-            without[last] += withoutCondition[level];
+            withSoFar += withCondition[level];
+            withoutSoFar += withoutCondition[level];
+            withThrough[last] = withSoFar;
+            withoutThrough[last] = withoutSoFar;
         }
 
         int count = last + 1;
-        CountArray withCounts = CountArray.Create(count, total);
-        CountArray withoutCounts = CountArray.Create(count, total);
-        for (int i = 0; i < count; i++)
-        {
-            withCounts.Set(i, with[i]);
-            withoutCounts.Set(i, without[i]);
-        }
-
-        return new ScoredSample(scores, withCounts, withoutCounts, count, totalWith, totalWithout, direction);
+        return new ScoredSample(
+            scores, Counts(withThrough, count, total), Counts(withoutThrough, count, total), count, totalWith, totalWithout, direction);
     }
+
+    private static CumulativeCounts Counts(long[] through, int count, long total) => total <= int.MaxValue
+        ? new CumulativeCounts(Array.ConvertAll(through.AsSpan(0, count).ToArray(), value => (int)value))
+        : new CumulativeCounts(through);
 
     internal static ulong Inversion(ScoreDirection direction) => direction == ScoreDirection.LowerIsPositive ? ulong.MaxValue : 0;
 
@@ -182,29 +182,27 @@ internal static class SampleBuilder
         {
             int n = with.Length + without.Length;
             double[] scores = UninitializedArray.Of<double>(n);
-            int[] withCounts = UninitializedArray.Of<int>(n);
-            int[] withoutCounts = UninitializedArray.Of<int>(n);
-            int count = Merge(with, without, Inversion(direction), scores, withCounts, withoutCounts);
+            int[] withThrough = UninitializedArray.Of<int>(n);
+            int[] withoutThrough = UninitializedArray.Of<int>(n);
+            int count = Merge(with, without, Inversion(direction), scores, withThrough, withoutThrough);
             if (count < n)
             {
                 Array.Resize(ref scores, count);
-                Array.Resize(ref withCounts, count);
-                Array.Resize(ref withoutCounts, count);
+                Array.Resize(ref withThrough, count);
+                Array.Resize(ref withoutThrough, count);
             }
 
             return new ScoredSample(
-                scores, new CountArray(withCounts), new CountArray(withoutCounts), count, with.Length, without.Length, direction);
+                scores, new CumulativeCounts(withThrough), new CumulativeCounts(withoutThrough), count, with.Length, without.Length, direction);
         }
 
         // One subject a step, without a branch on which group it comes from; a new level begins where the key differs from the last.
         private static int Merge(
-            ReadOnlySpan<ulong> with, ReadOnlySpan<ulong> without, ulong inversion, double[] scores, int[] withCounts, int[] withoutCounts)
+            ReadOnlySpan<ulong> with, ReadOnlySpan<ulong> without, ulong inversion, double[] scores, int[] withThrough, int[] withoutThrough)
         {
             int i = 0;
             int j = 0;
             int level = -1;
-            int levelWith = 0;
-            int levelWithout = 0;
             ulong previous = ulong.MaxValue;
             while (i < with.Length && j < without.Length)
             {
@@ -212,41 +210,26 @@ internal static class SampleBuilder
                 ulong right = without[j];
                 int fromWith = left <= right ? 1 : 0;
                 ulong key = left <= right ? left : right;
-                int same = key == previous ? 1 : 0;
-                level += 1 - same;
-                levelWith = (levelWith * same) + fromWith;
-                levelWithout = (levelWithout * same) + 1 - fromWith;
+                level += key != previous ? 1 : 0;
                 previous = key;
-                scores[level] = OrderedKey.ToDouble(key ^ inversion);
-                withCounts[level] = levelWith;
-                withoutCounts[level] = levelWithout;
                 i += fromWith;
                 j += 1 - fromWith;
+                scores[level] = OrderedKey.ToDouble(key ^ inversion);
+                withThrough[level] = i;
+                withoutThrough[level] = j;
             }
 
-            level = AppendRest(with.Slice(i), inversion, previous, level, scores, withCounts, withoutCounts);
-            level = AppendRest(without.Slice(j), inversion, previous, level, scores, withoutCounts, withCounts);
-            return level + 1;
-        }
-
-        private static int AppendRest(
-            ReadOnlySpan<ulong> rest, ulong inversion, ulong previous, int level, double[] scores, int[] counts, int[] otherCounts)
-        {
-            foreach (ulong key in rest)
+            for (; i < with.Length || j < without.Length; )
             {
-                if (key != previous)
-                {
-                    level++;
-                    scores[level] = OrderedKey.ToDouble(key ^ inversion);
-                    counts[level] = 0;
-                    otherCounts[level] = 0;
-                    previous = key;
-                }
-
-                counts[level]++;
+                ulong key = i < with.Length ? with[i++] : without[j++];
+                level += key != previous ? 1 : 0;
+                previous = key;
+                scores[level] = OrderedKey.ToDouble(key ^ inversion);
+                withThrough[level] = i;
+                withoutThrough[level] = j;
             }
 
-            return level;
+            return level + 1;
         }
     }
 }

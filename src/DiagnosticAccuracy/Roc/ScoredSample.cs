@@ -16,11 +16,11 @@ namespace DiagnosticAccuracy;
 public sealed class ScoredSample
 {
     private readonly double[] _scores;
-    private readonly CountArray _with;
-    private readonly CountArray _without;
+    private readonly CumulativeCounts _with;
+    private readonly CumulativeCounts _without;
 
     internal ScoredSample(
-        double[] scores, CountArray with, CountArray without, int levelCount, long withCondition, long withoutCondition, ScoreDirection direction)
+        double[] scores, CumulativeCounts with, CumulativeCounts without, int levelCount, long withCondition, long withoutCondition, ScoreDirection direction)
     {
         _scores = scores;
         _with = with;
@@ -29,7 +29,7 @@ public sealed class ScoredSample
         WithCondition = withCondition;
         WithoutCondition = withoutCondition;
         Direction = direction;
-        Levels = new LazyList<ScoreLevel>(levelCount, i => new ScoreLevel(_scores[i], _with[i], _without[i]));
+        Levels = new LazyList<ScoreLevel>(levelCount, i => new ScoreLevel(_scores[i], _with.At(i), _without.At(i)));
     }
 
     /// <summary>Gets which end of the scale speaks for the condition.</summary>
@@ -56,9 +56,9 @@ public sealed class ScoredSample
     // May be longer than LevelCount.
     internal double[] Scores => _scores;
 
-    internal CountArray With => _with;
+    internal CumulativeCounts With => _with;
 
-    internal CountArray Without => _without;
+    internal CumulativeCounts Without => _without;
 
     /// <summary>Why quantities that need both groups are undefined; null when both are there.</summary>
     internal UndefinedReason? MissingGroup =>
