@@ -12,6 +12,7 @@ public sealed class MalformedFileTests : IDisposable
     [InlineData("status,score\n1,2\n0,1,7\n", "line 3: there are 3 fields; the heading has 2")]
     [InlineData("status,score,note\n1,5,a\n0,3,\"b\n1,4,c\n0,1,d\n", "line 3: a quotation mark is not paired")]
     [InlineData("status,score,note\n1,5,a\n0,3,\"b\n1,4,c\n0,1,\"d\n1,9,e\n", "line 3: a field has quotation marks inside")]
+    [InlineData("status,score,note\n1,5,a\n\n0,3,5\" wide\n1,4,c\n", "line 4: a quotation mark is not paired")]
     [InlineData("status,score\n1,2\n0,3\"4\"\n", "line 3: a field has quotation marks inside")]
     [InlineData("status,score\n1,2\n0,1e999\n", "column 'score', line 3: '1e999' is beyond the range of numbers")]
     [InlineData("status,score\n1,2\n0,-1e999\n", "column 'score', line 3: '-1e999' is beyond the range of numbers")]
@@ -27,10 +28,28 @@ public sealed class MalformedFileTests : IDisposable
     [InlineData("status,score,note\n1,2,\"a\nb\"\n0,q,\"c\nd\"\n", 4)]
     [InlineData("status,score,note\r\n1,2,\"a\r\nb\"\r\n0,q,\"c\r\nd\"\r\n", 4)]
     [InlineData("\nstatus,score\n\n\n1,2\n\n0,q\n", 7)]
+    [InlineData("status,score,note\n1,2,a\n0,q,\"b\u2028c\u0085d\fe\"\n", 3)]
+    [InlineData("status,score,note\r1,2,\"a\rb\"\r0,q,c\r", 4)]
     public void The_line_is_the_one_on_which_the_row_begins(string content, int line)
     {
         File.WriteAllText(_file, content);
         Assert.Contains($"column 'score', line {line}: 'q'", ReportRun.Fails(ReportRun.Options(_file)), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Bytes_that_are_no_text_are_an_error_of_one_line_too()
+    {
+        Random random = new(20260903);
+        for (int i = 0; i < 300; i++)
+        {
+            byte[] bytes = new byte[random.Next(1, 3000)];
+            random.NextBytes(bytes);
+            File.WriteAllBytes(_file, bytes);
+            Assert.DoesNotContain("line -", ReportRun.Fails(ReportRun.Options(_file)), StringComparison.Ordinal);
+            File.WriteAllBytes(_file, [.. "status,score\n1,2\n0,1\n"u8, .. bytes]);
+            string error = ReportRun.Fails(ReportRun.Options(_file));
+            Assert.Matches(@"^error: (column '[a-z]+', )?line ([4-9]|\d\d+): ", error);
+        }
     }
 
     [Fact]

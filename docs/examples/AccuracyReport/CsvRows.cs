@@ -14,6 +14,8 @@ internal sealed class CsvRows : IDisposable
 
     public CsvRows(TextReader text) => _parser = new CsvParser(text, new CsvConfiguration(CultureInfo.InvariantCulture)
     {
+        // Blank lines are passed over in Next, where they count as lines.
+        IgnoreBlankLines = false,
         BadDataFound = _ => throw new StudyException(
             $"line {Line}: a field has quotation marks inside; such a field is written in quotation marks, with each inner one doubled"),
     });
@@ -28,16 +30,18 @@ internal sealed class CsvRows : IDisposable
 
     public bool Next()
     {
-        if (!_parser.Read())
+        do
         {
-            return false;
+            // The parser counts to the last line of a row, so that the next one begins below it.
+            Line = _parser.RawRow + 1;
+            if (!_parser.Read())
+            {
+                return false;
+            }
         }
+        while (_parser.RawRecord.AsSpan().Trim("\r\n").IsEmpty);
 
-        // The parser knows the last line of a row; a row in which a field has line breaks began earlier.
-        string row = _parser.RawRecord.ReplaceLineEndings("\n").TrimStart('\n');
-        bool isPaired = row.Count(character => character == '"') % 2 == 0;
-        Line = _parser.RawRow - (isPaired ? row.TrimEnd('\n') : row).Count(character => character == '\n');
-        if (!isPaired)
+        if (_parser.RawRecord.Count(character => character == '"') % 2 != 0)
         {
             throw new StudyException($"line {Line}: a quotation mark is not paired");
         }
