@@ -7,6 +7,7 @@ internal static class AreaIntervals
 {
     private const string LogitName = "logit with DeLong variance";
     private const string WaldName = "Wald with DeLong variance";
+    private const string HanleyMcNeilName = "Wald with Hanley-McNeil exponential variance";
     private const string NewcombeName = "score-type (Newcombe 2006, method 5)";
 
     public static ConfidenceInterval Interval(AreaUnderCurve area, Confidence confidence, AreaMethod method)
@@ -16,6 +17,7 @@ internal static class AreaIntervals
             AreaMethod.Logit => LogitName,
             AreaMethod.Wald => WaldName,
             AreaMethod.NewcombeScore => NewcombeName,
+            AreaMethod.HanleyMcNeilWald => HanleyMcNeilName,
             _ => throw Guard.UnknownOption(method),
         };
         if (!area.IsDefined)
@@ -28,21 +30,23 @@ internal static class AreaIntervals
             return NewcombeScore(area, confidence, name);
         }
 
-        Quantity standardError = area.StandardError;
-        if (!standardError.IsDefined)
+        bool exponential = method == AreaMethod.HanleyMcNeilWald;
+        Quantity variance = exponential ? area.VarianceBy(AreaVarianceMethod.HanleyMcNeilExponential) : area.Variance;
+        string which = exponential ? "Hanley-McNeil" : "DeLong";
+        if (!variance.IsDefined)
         {
-            return NewcombeScore(area, confidence, $"{NewcombeName}, the DeLong variance being undefined");
+            return NewcombeScore(area, confidence, $"{NewcombeName}, the {which} variance being undefined");
         }
 
-        if (standardError.Value == 0)
+        if (variance.Value == 0)
         {
-            return NewcombeScore(area, confidence, $"{NewcombeName}, the DeLong variance being zero");
+            return NewcombeScore(area, confidence, $"{NewcombeName}, the {which} variance being zero");
         }
 
-        double z = StandardNormal.UpperQuantile(confidence.Tail);
+        double margin = StandardNormal.UpperQuantile(confidence.Tail) * Math.Sqrt(variance.Value);
         return method == AreaMethod.Logit
-            ? Logit(area.Value, area.Complement, z * standardError.Value, confidence, name)
-            : Wald(area.Value, z * standardError.Value, confidence, name);
+            ? Logit(area.Value, area.Complement, margin, confidence, name)
+            : Wald(area.Value, margin, confidence, name);
     }
 
     // odds * exp(-+ z se / (A (1 - A))), back on the scale of the area without forming the odds.

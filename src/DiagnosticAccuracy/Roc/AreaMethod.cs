@@ -20,4 +20,10 @@ public enum AreaMethod
     /// sizes only, and has limits at every area.
     /// </summary>
     NewcombeScore,
+
+    /// <summary>
+    /// The area plus and minus a multiple of the exponential standard error of Hanley and McNeil (Radiology 1982;143:29), cut at 0 and 1. It needs the
+    /// area and the group sizes only.
+    /// </summary>
+    HanleyMcNeilWald,
 }

@@ -25,7 +25,7 @@ public sealed class AreaUnderCurve : IIntervalQuantity
         Pairs = (BigInteger)moments.WithCondition * moments.WithoutCondition;
         Value = WhyUndefined is null ? ExactRatio.ToDouble(moments.Sum, 2 * Pairs) : double.NaN;
         Complement = WhyUndefined is null ? ExactRatio.ToDouble((2 * Pairs) - moments.Sum, 2 * Pairs) : double.NaN;
-        Variance = FindVariance();
+        Variance = AreaVariances.Of(this, AreaVarianceMethod.DeLong);
     }
 
     /// <inheritdoc/>
@@ -109,26 +109,14 @@ public sealed class AreaUnderCurve : IIntervalQuantity
     public ConfidenceInterval Interval(Confidence confidence = default, AreaMethod method = AreaMethod.Logit) =>
         AreaIntervals.Interval(this, confidence, method);
 
+    /// <summary>The variance of the area by a stated method.</summary>
+    /// <param name="method">The method.</param>
+    /// <returns>The variance, 0 or more; undefined, with the reason, when a group is too small for the method.</returns>
+    /// <exception cref="ArgumentOutOfRangeException"><paramref name="method"/> is not a value of its type.</exception>
+    public Quantity VarianceBy(AreaVarianceMethod method) => AreaVariances.Of(this, method);
+
     /// <summary>For example "0.861438 (90 with, 51 without the condition)".</summary>
     /// <returns>The text, in the invariant culture.</returns>
     public override string ToString() =>
         $"{Display.Of(this)} ({Display.Of(WithCondition)} with, {Display.Of(WithoutCondition)} without the condition)";
-
-    private Quantity FindVariance()
-    {
-        if (WhyUndefined is { } reason)
-        {
-            return Quantity.Undefined(reason);
-        }
-
-        if (WithCondition < 2 || WithoutCondition < 2)
-        {
-            string group = WithCondition < 2 ? "with" : "without";
-            return Quantity.Undefined(UndefinedCause.TooFewSubjects, $"one subject {group} the condition gives no variance");
-        }
-
-        double with = DeLongVariance.Part(_moments.SumOfSquaresWith, _moments.Sum, _moments.Sum, WithCondition, WithoutCondition);
-        double without = DeLongVariance.Part(_moments.SumOfSquaresWithout, _moments.Sum, _moments.Sum, WithoutCondition, WithCondition);
-        return Quantity.Of(with + without);
-    }
 }

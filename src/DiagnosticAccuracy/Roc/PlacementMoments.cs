@@ -10,8 +10,23 @@ namespace DiagnosticAccuracy.Roc;
 /// the same; for a subject without the condition, v is twice the number with it who score above, plus those who score the same.
 /// A placement (a structural component, DeLong 1988) is u / (2 n0) or v / (2 n1). The sum of the u equals the sum of the v.
 /// </remarks>
+/// <param name="WithCondition">The size n1.</param>
+/// <param name="WithoutCondition">The size n0.</param>
+/// <param name="Sum">The sum of the u, and of the v.</param>
+/// <param name="SumOfSquaresWith">The sum of the squared u.</param>
+/// <param name="SumOfSquaresWithout">The sum of the squared v.</param>
+/// <param name="TiedPairs">The sum over levels of w o, with w and o the subjects of both groups at the level.</param>
+/// <param name="TiedTriplesWith">The sum over levels of w^2 o.</param>
+/// <param name="TiedTriplesWithout">The sum over levels of w o^2.</param>
 internal readonly record struct PlacementMoments(
-    long WithCondition, long WithoutCondition, BigInteger Sum, BigInteger SumOfSquaresWith, BigInteger SumOfSquaresWithout, BigInteger TiedPairs)
+    long WithCondition,
+    long WithoutCondition,
+    BigInteger Sum,
+    BigInteger SumOfSquaresWith,
+    BigInteger SumOfSquaresWithout,
+    BigInteger TiedPairs,
+    BigInteger TiedTriplesWith,
+    BigInteger TiedTriplesWithout)
 {
     public static PlacementMoments Of(ScoredSample sample)
     {
@@ -103,6 +118,8 @@ internal readonly record struct PlacementMoments(
         BigInteger squaresWith = 0;
         BigInteger squaresWithout = 0;
         BigInteger tied = 0;
+        BigInteger tiedWith = 0;
+        BigInteger tiedWithout = 0;
         for (int i = 0; i < sample.LevelCount; i++)
         {
             BigInteger w = sample.With.At(i);
@@ -113,10 +130,13 @@ internal readonly record struct PlacementMoments(
             squaresWith += w * u * u;
             squaresWithout += o * v * v;
             tied += w * o;
+            tiedWith += w * w * o;
+            tiedWithout += w * o * o;
             below += o;
             withSoFar += w;
         }
 
-        return new PlacementMoments(sample.WithCondition, sample.WithoutCondition, sum, squaresWith, squaresWithout, tied);
+        return new PlacementMoments(
+            sample.WithCondition, sample.WithoutCondition, sum, squaresWith, squaresWithout, tied, tiedWith, tiedWithout);
     }
 }

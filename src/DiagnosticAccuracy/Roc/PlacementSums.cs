@@ -24,6 +24,8 @@ internal struct ShortPlacementSums(long withCondition, long withoutCondition) : 
     private ulong _squaresWith;
     private ulong _squaresWithout;
     private ulong _tied;
+    private ulong _tiedWith;
+    private ulong _tiedWithout;
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public void Add(ulong with, ulong without)
@@ -33,13 +35,16 @@ internal struct ShortPlacementSums(long withCondition, long withoutCondition) : 
         _sum += with * u;
         _squaresWith += with * u * u;
         _squaresWithout += without * v * v;
-        _tied += with * without;
+        ulong tied = with * without;
+        _tied += tied;
+        _tiedWith += tied * with;
+        _tiedWithout += tied * without;
         _below += without;
         _withSoFar += with;
     }
 
     public readonly PlacementMoments ToMoments() =>
-        new(withCondition, withoutCondition, _sum, _squaresWith, _squaresWithout, _tied);
+        new(withCondition, withoutCondition, _sum, _squaresWith, _squaresWithout, _tied, _tiedWith, _tiedWithout);
 }
 
 /// <summary>Sums in 128 bits, for samples of up to 2,147,483,647 subjects.</summary>
@@ -51,6 +56,8 @@ internal struct LongPlacementSums(long withCondition, long withoutCondition) : I
     private WideSum _squaresWith;
     private WideSum _squaresWithout;
     private WideSum _tied;
+    private WideSum _tiedWith;
+    private WideSum _tiedWithout;
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public void Add(ulong with, ulong without)
@@ -61,7 +68,10 @@ internal struct LongPlacementSums(long withCondition, long withoutCondition) : I
         _sum.Add(with * u);
         _squaresWith.AddProduct(u * u, with);
         _squaresWithout.AddProduct(v * v, without);
-        _tied.Add(with * without);
+        ulong tied = with * without;
+        _tied.Add(tied);
+        _tiedWith.AddProduct(tied, with);
+        _tiedWithout.AddProduct(tied, without);
         _below += without;
         _withSoFar += with;
     }
@@ -72,5 +82,7 @@ internal struct LongPlacementSums(long withCondition, long withoutCondition) : I
         _sum.ToBigInteger(),
         _squaresWith.ToBigInteger(),
         _squaresWithout.ToBigInteger(),
-        _tied.ToBigInteger());
+        _tied.ToBigInteger(),
+        _tiedWith.ToBigInteger(),
+        _tiedWithout.ToBigInteger());
 }

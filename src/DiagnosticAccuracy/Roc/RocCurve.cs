@@ -55,6 +55,15 @@ public sealed class RocCurve
         return new OperatingPoint(cutoff, TableAt(cutoff.Score is { } score ? LevelsPositiveAt(score) : 0));
     }
 
+    /// <summary>The test that the scores do not tell the groups apart: Mann-Whitney, with ties.</summary>
+    /// <param name="method">The method; the normal approximation with the variance corrected for ties unless said.</param>
+    /// <param name="alternative">Two-sided unless said; greater means that the area is above one half.</param>
+    /// <returns>The test; undefined, with the reason, when a group is empty.</returns>
+    /// <exception cref="ArgumentOutOfRangeException">An option is not a value of its type.</exception>
+    /// <remarks>Sources: Mann and Whitney, Ann Math Stat 1947;18:50; Streitberg and Roehmel, Stat Softw Newsl 1986;12:10.</remarks>
+    public ChanceTest TestOfChance(ChanceTestMethod method = ChanceTestMethod.Normal, Alternative alternative = Alternative.TwoSided) =>
+        RankSumTest.Of(Sample, Area, method, alternative);
+
     /// <summary>For example "131 points, area 0.861438 (90 with, 51 without the condition)".</summary>
     /// <returns>The text, in the invariant culture.</returns>
     public override string ToString() => $"{Display.Of(Points.Count)} points, area {Area}";
