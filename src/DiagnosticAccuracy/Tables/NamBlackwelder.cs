@@ -43,10 +43,10 @@ internal readonly struct NamBlackwelder(PairedTable table) : INormalLimits
         double x2 = table.SecondPositives;
         double spread = Math.Sqrt((table.Discordant + 0.5) / x1 / x2);
         double start = ElementaryFunctions.Log1P((table.FirstOnly - table.SecondOnly) / x2);
-        return FallingRoot.Find(new ScoreOfLogarithm(new PairedRatioScore(table), z), start, Math.Max(0.5, Math.Abs(z)) * spread);
+        return FallingRoot.Find(new PairedScoreOfLogarithm(new PairedRatioScore(table), z), start, Math.Max(0.5, Math.Abs(z)) * spread);
     }
 
-    private readonly struct ScoreOfLogarithm(PairedRatioScore score, double target) : IFunction
+    private readonly struct PairedScoreOfLogarithm(PairedRatioScore score, double target) : IFunction
     {
         public double Value(double x) => score.StatisticAtLog(x) - target;
     }

@@ -28,7 +28,7 @@ internal readonly struct TangoScore(PairedTable table) : INormalLimits
             return low;
         }
 
-        DistanceToQuantile f = new(score, z);
+        TangoDistance f = new(score, z);
         double n = table.Total;
         double step = Math.Max(z, 0.1) * (Math.Sqrt(table.Discordant) + 1) / n;
         double high = low;
@@ -43,7 +43,7 @@ internal readonly struct TangoScore(PairedTable table) : INormalLimits
         return RootFinding.Find(f, low, high, RootFinding.DefaultRelativeAccuracy, 1e-28);
     }
 
-    private readonly struct DistanceToQuantile(PairedDifferenceScore score, double z) : IFunction
+    private readonly struct TangoDistance(PairedDifferenceScore score, double z) : IFunction
     {
         public double Value(double x) => x >= 1 ? double.NegativeInfinity : score.Statistic(x) + z;
     }
