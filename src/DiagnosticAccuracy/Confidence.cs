@@ -1,4 +1,5 @@
 using System.Globalization;
+using DiagnosticAccuracy.Numerics;
 
 namespace DiagnosticAccuracy;
 
@@ -88,6 +89,10 @@ public readonly record struct Confidence
 
         return new Confidence(errorProbability, side);
     }
+
+    /// <summary>The confidence that each of two independent intervals needs for both to hold together with this one.</summary>
+    internal Confidence RootOfTwo() =>
+        new(-ElementaryFunctions.Expm1(0.5 * ElementaryFunctions.Log1P(-ErrorProbability)), Side);
 
     /// <summary>For example "95 % two-sided" or "97.5 % lower bound".</summary>
     /// <returns>The text, in the invariant culture.</returns>

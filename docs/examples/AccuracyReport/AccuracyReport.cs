@@ -1,4 +1,5 @@
 using System.CommandLine;
+using CsvHelper;
 
 namespace DiagnosticAccuracy.Examples;
 
@@ -40,9 +41,9 @@ public static class AccuracyReport
 
             return Report(command.Design(parsed), output);
         }
-        catch (Exception exception) when (exception is StudyException or IOException or UnauthorizedAccessException or ArgumentException)
+        catch (Exception exception) when (exception is StudyException or IOException or UnauthorizedAccessException or ArgumentException or CsvHelperException)
         {
-            string message = exception.Message.ReplaceLineEndings(" ");
+            string message = Printable.Of(exception.Message.ReplaceLineEndings(" "));
             int parameter = message.IndexOf(" (Parameter '", StringComparison.Ordinal);
             error.WriteLine("error: " + (parameter < 0 ? message : message[..parameter]));
             return Failed;

@@ -12,6 +12,7 @@ internal static class DemoStudy
     {
         File = DataFile("platelet-units.csv"),
         StatusColumn = "culture",
+        IdColumn = "unit",
         WithCondition = ["positive"],
         WithoutCondition = ["negative"],
         StatusUnknown = ["indeterminate"],

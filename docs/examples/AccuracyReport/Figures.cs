@@ -18,7 +18,7 @@ internal static class Figures
         return value < 1 && value > 1 - (step / 2) ? ">" + Share(1 - step, decimals) : text;
     }
 
-    /// <summary>A ratio from 0 to infinity, to four significant digits or whole.</summary>
+    /// <summary>A ratio from 0 to infinity: four significant digits from 1 up, whole from 1000 up, four decimals below 1.</summary>
     public static string Ratio(double value) => value switch
     {
         double.PositiveInfinity => "infinite",
@@ -31,19 +31,22 @@ internal static class Figures
         _ => value.ToString("F4", CultureInfo.InvariantCulture),
     };
 
-    /// <summary>A p-value, to four significant digits.</summary>
-    public static string Probability(double value) => value switch
-    {
-        < 1e-6 => "<0.000001",
-        < 0.0001 => value.ToString("0.0000000", CultureInfo.InvariantCulture),
-        < 0.01 => value.ToString("0.000000", CultureInfo.InvariantCulture),
-        _ => value.ToString("0.0000", CultureInfo.InvariantCulture),
-    };
+    /// <summary>A p-value, to four significant digits, never 1 unless exact.</summary>
+    public static string Probability(double value) =>
+        value < 1e-6 ? "<0.000001" : Share(value, SignificantDecimals(value, 4));
 
-    public static string Number(double value, int decimals) =>
-        value.ToString("F" + decimals.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
+    /// <summary>A standard error: six decimals, more where four significant digits need them.</summary>
+    public static string StandardError(double value) => Number(value, SignificantDecimals(value, 6));
+
+    /// <summary>A signed number; what rounds to zero has no sign.</summary>
+    public static string Number(double value, int decimals)
+    {
+        string text = value.ToString("F" + decimals.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
+        return text.StartsWith('-') && !text.AsSpan().ContainsAnyInRange('1', '9') ? text[1..] : text;
+    }
 
     public static string Count(long value) => value.ToString(CultureInfo.InvariantCulture);
 
-    public static string Exact(double value) => value.ToString("R", CultureInfo.InvariantCulture);
+    private static int SignificantDecimals(double value, int fewest) =>
+        value > 0 ? Math.Clamp(3 - (int)Math.Floor(Math.Log10(value)), fewest, 15) : fewest;
 }

@@ -4,12 +4,13 @@ namespace DiagnosticAccuracy.Examples;
 internal sealed class Statement
 {
     private const int Width = 80;
+    private const int LabelWidth = 20;
     private const int ShareDecimals = 4;
 
     private readonly StudyDesign _design;
     private readonly Study _study;
     private readonly TextWriter _output;
-    private readonly List<string> _methods = [];
+    private readonly MethodsUsed _methods = new();
     private int _section;
 
     private Statement(StudyDesign design, Study study, TextWriter output)
@@ -52,6 +53,11 @@ internal sealed class Statement
         Row("reference", $"{_design.StatusColumn}: {Values(_design.WithCondition)} = with the condition,");
         Row(string.Empty, $"{Values(_design.WithoutCondition)} = without it");
         Row("rows read", Figures.Count(_study.RowsRead));
+        if (_design.IdColumn is { } id)
+        {
+            Row("subjects", $"named by {id}; no name comes twice");
+        }
+
         LeftOutOf(_design.StatusColumn, "status not known");
         int with = _study.Subjects.Count(subject => subject.HasCondition);
         Row("status known", $"{_study.Subjects.Count}: {with} with the condition, {_study.Subjects.Count - with} without it");
@@ -76,7 +82,10 @@ internal sealed class Statement
     {
         foreach (LeftOut entry in _study.LeftOut.Where(entry => entry.What == what))
         {
-            Row("  left out", $"{entry.Rows} with {what} {entry.Reason} ({meaning})");
+            string groups = entry.StatusUnknown > 0
+                ? string.Empty
+                : $": {entry.WithCondition} with the condition, {entry.WithoutCondition} without it";
+            Row("  left out", $"{entry.Rows} with {what} {entry.Reason} ({meaning}){groups}");
         }
     }
 
@@ -95,7 +104,7 @@ internal sealed class Statement
         {
             AreaUnderCurve area = curves[i].Area;
             Row(_design.Scores[i].Name, Estimate("areas", area, area.Interval(_design.Confidence), value => Figures.Share(value, 6)));
-            Row("  standard error", Plain(area.StandardError, value => Figures.Number(value, 6)));
+            Row("  standard error", Plain(area.StandardError, Figures.StandardError));
         }
     }
 
@@ -118,7 +127,7 @@ internal sealed class Statement
         Row($"area of {first}", Plain(comparison.First, value => Figures.Share(value, 6)));
         Row($"area of {second}", Plain(comparison.Second, value => Figures.Share(value, 6)));
         Row("difference", Estimate("difference of areas", comparison.Difference, comparison.Difference.Interval(_design.Confidence), value => Figures.Number(value, 6)));
-        Row("  standard error", Plain(comparison.Difference.StandardError, value => Figures.Number(value, 6)));
+        Row("  standard error", Plain(comparison.Difference.StandardError, Figures.StandardError));
         Row("correlation", Plain(comparison.Correlation, value => Figures.Number(value, 4)));
         Row("z", Plain(comparison.Z, value => Figures.Number(value, 4)));
         Row("p, two-sided", Plain(comparison.PValue, Figures.Probability));
@@ -138,7 +147,8 @@ internal sealed class Statement
         Row("cutoff", $"positive when {point.Cutoff} (chosen on these data)");
         if (choice.IsTrivial)
         {
-            Row(string.Empty, "the target is out of reach: this cutoff tells nobody apart");
+            string everybody = table.Negatives == 0 ? "every result is positive" : "no result is positive";
+            Row(string.Empty, $"the target is out of reach: {everybody} here, which tells nobody apart");
         }
 
         Line();
@@ -171,10 +181,10 @@ internal sealed class Statement
 
     private void Share(string name, Proportion proportion) => Row(
         name,
-        $"{$"{proportion.Successes}/{proportion.Trials}",-10} " + Estimate("sensitivity and specificity", proportion, proportion.Interval(_design.Confidence), value => Figures.Share(value, ShareDecimals)));
+        $"{$"{proportion.Successes}/{proportion.Trials}",-13} " + Estimate("sensitivity and specificity", proportion, proportion.Interval(_design.Confidence), value => Figures.Share(value, ShareDecimals)));
 
     private void Ratio(string name, ProportionRatio ratio) =>
-        Row(name, $"{string.Empty,-10} " + Estimate("likelihood ratios", ratio, ratio.Interval(_design.Confidence), Figures.Ratio));
+        Row(name, $"{string.Empty,-13} " + Estimate("likelihood ratios", ratio, ratio.Interval(_design.Confidence), Figures.Ratio));
 
     private string Estimate(string kind, IQuantity quantity, ConfidenceInterval interval, Func<double, string> format)
     {
@@ -188,11 +198,7 @@ internal sealed class Statement
             return $"{format(quantity.Value)}; interval undefined: {interval.WhyUndefined}";
         }
 
-        string used = $"{kind}: {interval.Method}";
-        if (!_methods.Contains(used))
-        {
-            _methods.Add(used);
-        }
+        _methods.Add(kind, interval.Method);
         return $"{format(quantity.Value),-9} ({format(interval.Lower)} to {format(interval.Upper)})";
     }
 
@@ -203,9 +209,10 @@ internal sealed class Statement
     {
         Section("CAUTIONS");
         Bullet("The cutoffs were chosen and are judged on the same subjects: the figures at them are optimistic, and their intervals do not know that the cutoff was chosen. Confirm a cutoff on new subjects before it is used.");
-        Bullet($"Predictive values and expected cells hold at the stated prevalence of {_design.Prevalence} and for people like those studied. If the study enrolled by status, its own share with the condition says nothing about the intended users.");
+        Bullet($"Predictive values and expected cells hold at the stated prevalence of {_design.Prevalence} only, which is taken as known. The study's own share with the condition is not used: where subjects were enrolled by status (an enriched design), it says nothing about the intended users.");
+        Bullet("Sensitivity and specificity belong to the spectrum of subjects studied. Clear-cut cases and healthy controls can make a test look better than it will be among those it is meant for.");
         Bullet("An area averages over all cutoffs, most of which nobody would use. It does not say that a test is good enough for a purpose.");
-        Bullet("Subjects without a result are left out above. If results fail more often in one group, accuracy in use will be lower than stated.");
+        Bullet("Subjects without a result are left out above. Where failing is not by chance alone, accuracy in use differs from what is stated.");
         Bullet("Intervals are for independent subjects: not for several results of the same subject.");
         Bullet("This is a calculation, not a medical device and not advice. Whether and how a test is used is for local rules and licensed practice to decide.");
     }
@@ -213,14 +220,15 @@ internal sealed class Statement
     private void Methods()
     {
         Section("METHODS");
-        Bullet("Empirical ROC curve; area as the Mann-Whitney share of pairs, ties counting one half; standard errors and comparison after DeLong, DeLong and Clarke-Pearson (1988).");
+        string delong = _design.Scores.Count == 2 ? "standard errors and paired comparison" : "standard error";
+        Bullet($"Empirical ROC curve; area as the Mann-Whitney share of pairs, ties counting one half; {delong} after DeLong, DeLong and Clarke-Pearson (1988).");
         Bullet($"Intervals: {_design.Confidence}; the methods that were used:");
-        foreach (string method in _methods)
+        foreach (string method in _methods.Lines)
         {
             Bullet(method, indent: 6);
         }
 
-        Bullet("Expected cells by largest remainders, so that they add up.");
+        Bullet("Expected cells are rounded to whole people by largest remainders, so that they add up; a 0 among them may stand for less than one.");
         Bullet($"DiagnosticAccuracy {typeof(RocCurve).Assembly.GetName().Version?.ToString(3)}.");
     }
 
@@ -255,14 +263,24 @@ internal sealed class Statement
         Line(new string('-', Width));
     }
 
-    private void Row(string name, string text) => Wrapped($"   {name,-17} {text}", 21);
+    private void Row(string name, string text)
+    {
+        string label = Printable.Of("   " + name);
+        if (label.Length > LabelWidth)
+        {
+            Wrapped(label, 5);
+            label = string.Empty;
+        }
+
+        Wrapped($"{label.PadRight(LabelWidth)} {text}", LabelWidth + 1);
+    }
 
     private void Bullet(string text, int indent = 3) => Wrapped($"{new string(' ', indent)}- {text}", indent + 2);
 
     // Breaks at spaces; a word that is longer than a line is broken where the line ends.
     private void Wrapped(string text, int indent)
     {
-        string rest = text;
+        string rest = Printable.Of(text);
         while (rest.Length > Width)
         {
             int cut = rest.LastIndexOf(' ', Width);

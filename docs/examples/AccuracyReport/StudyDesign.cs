@@ -28,6 +28,9 @@ public sealed record StudyDesign
 
     public required string StatusColumn { get; init; }
 
+    /// <summary>The column that names each subject, so that none is read twice; null when there is none.</summary>
+    public string? IdColumn { get; init; }
+
     public required IReadOnlyList<string> WithCondition { get; init; }
 
     public required IReadOnlyList<string> WithoutCondition { get; init; }

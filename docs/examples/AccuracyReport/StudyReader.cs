@@ -1,19 +1,17 @@
 using System.Globalization;
-using CsvHelper;
-using CsvHelper.Configuration;
 
 namespace DiagnosticAccuracy.Examples;
 
-/// <summary>Reads a study from a CSV file with a heading line. Nothing is dropped without being counted.</summary>
+/// <summary>Reads a study from a CSV file with a heading line. No row is dropped without being counted.</summary>
 public static class StudyReader
 {
     public static Study Read(StudyDesign design)
     {
         ArgumentNullException.ThrowIfNull(design);
-        string[] declared = [.. design.WithCondition, .. design.WithoutCondition, .. design.StatusUnknown];
-        if (declared.GroupBy(value => value).FirstOrDefault(group => group.Count() > 1) is { } twice)
+        CheckRoles(design);
+        if (Directory.Exists(design.File))
         {
-            throw new StudyException($"column '{design.StatusColumn}': status '{twice.Key}' is declared more than once; allowed is one meaning for each value");
+            throw new StudyException($"{design.File} is a folder; allowed is a CSV file");
         }
 
         if (!File.Exists(design.File))
@@ -22,37 +20,56 @@ public static class StudyReader
         }
 
         using StreamReader text = new(design.File);
-        using CsvReader csv = new(text, new CsvConfiguration(CultureInfo.InvariantCulture) { BadDataFound = null, MissingFieldFound = null });
-        return Read(csv, design);
-    }
-
-    private static Study Read(CsvReader csv, StudyDesign design)
-    {
-        if (!csv.Read() || !csv.ReadHeader())
+        using CsvRows rows = new(text);
+        if (!rows.Next())
         {
             throw new StudyException($"{design.File}: the file is empty; allowed is a heading line and one line for each subject");
         }
 
-        string[] columns = csv.HeaderRecord!;
+        return Read(rows, design);
+    }
+
+    private static void CheckRoles(StudyDesign design)
+    {
+        string[] declared = [.. design.WithCondition, .. design.WithoutCondition, .. design.StatusUnknown];
+        if (Repeated(declared) is { } value)
+        {
+            throw new StudyException(
+                $"column '{design.StatusColumn}': status {Printable.Quoted(value)} is declared more than once; allowed is one meaning for each value");
+        }
+
+        string[] columns = [design.StatusColumn, .. design.Scores.Select(score => score.Name), .. design.IdColumn is { } id ? [id] : Array.Empty<string>()];
+        if (Repeated(columns) is { } column)
+        {
+            throw new StudyException($"column '{column}' is given more than one role; allowed is one of --status, --score and --id, once");
+        }
+    }
+
+    private static Study Read(CsvRows rows, StudyDesign design)
+    {
+        string[] columns = rows.Fields;
         int status = Column(columns, design.StatusColumn, design.File);
         int[] scores = [.. design.Scores.Select(score => Column(columns, score.Name, design.File))];
+        SubjectNames? names = design.IdColumn is { } id ? new SubjectNames(id, Column(columns, id, design.File)) : null;
         List<Subject> subjects = [];
-        Dictionary<(string What, string Reason), int> leftOut = [];
-        int rows = 0;
-        while (csv.Read())
+        List<(string What, string Reason, bool? HasCondition)> leftOut = [];
+        int count = 0;
+        while (rows.Next())
         {
-            rows++;
-            string value = Field(csv, status);
-            bool? hasCondition = Status(value, csv.Context.Parser!.RawRow, design);
+            count++;
+            rows.Expect(columns.Length);
+            names?.Add(rows);
+            string value = rows.Fields[status];
+            bool? hasCondition = Status(value, rows.Line, design);
             double?[] results = new double?[scores.Length];
             for (int i = 0; i < scores.Length; i++)
             {
-                results[i] = Score(Field(csv, scores[i]), csv.Context.Parser.RawRow, design.Scores[i].Name, design.NoResult);
+                results[i] = Score(rows.Fields[scores[i]], rows.Line, design.Scores[i].Name, design.NoResult);
             }
 
             if (hasCondition is not { } known)
             {
-                Count(leftOut, design.StatusColumn, Shown(value));
+                leftOut.Add((design.StatusColumn, Printable.Quoted(value), null));
                 continue;
             }
 
@@ -60,29 +77,35 @@ public static class StudyReader
             {
                 if (results[i] is null)
                 {
-                    Count(leftOut, design.Scores[i].Name, Shown(Field(csv, scores[i])));
+                    leftOut.Add((design.Scores[i].Name, Printable.Quoted(rows.Fields[scores[i]]), known));
                 }
             }
 
             subjects.Add(new Subject(known, results));
         }
 
-        if (rows == 0)
-        {
-            throw new StudyException($"{design.File}: there is a heading line and no subject below it");
-        }
-
-        return new Study(rows, subjects, [.. leftOut.Select(entry => new LeftOut(entry.Key.What, entry.Key.Reason, entry.Value))]);
+        return count > 0
+            ? new Study(count, subjects, [.. leftOut.GroupBy(entry => (entry.What, entry.Reason)).Select(Counted)])
+            : throw new StudyException($"{design.File}: there is a heading line and no subject below it");
     }
+
+    private static LeftOut Counted(IGrouping<(string What, string Reason), (string What, string Reason, bool? HasCondition)> group) => new(
+        group.Key.What,
+        group.Key.Reason,
+        group.Count(entry => entry.HasCondition is true),
+        group.Count(entry => entry.HasCondition is false),
+        group.Count(entry => entry.HasCondition is null));
 
     private static int Column(string[] columns, string name, string file)
     {
         int[] places = [.. Enumerable.Range(0, columns.Length).Where(i => columns[i] == name)];
+        string separated = columns.Length == 1 ? "; fields are separated by commas" : string.Empty;
         return places.Length switch
         {
             1 => places[0],
-            0 => throw new StudyException($"{file}: there is no column '{name}'; the columns are {string.Join(", ", columns)}"),
-            _ => throw new StudyException($"{file}: {places.Length} columns are called '{name}'; allowed is one"),
+            0 => throw new StudyException(
+                $"{file}: there is no column {Printable.Quoted(name)}; the columns are {Printable.Short(string.Join(", ", columns), 200)}{separated}"),
+            _ => throw new StudyException($"{file}: {places.Length} columns are called {Printable.Quoted(name)}; allowed is one"),
         };
     }
 
@@ -101,7 +124,7 @@ public static class StudyReader
         return design.StatusUnknown.Contains(value)
             ? null
             : throw new StudyException(
-                $"column '{design.StatusColumn}', line {line}: status {Shown(value)} was not declared; declare it with --with-condition, --without-condition or --status-unknown");
+                $"column '{design.StatusColumn}', line {line}: status {Printable.Quoted(value)} was not declared; declare it with --with-condition, --without-condition or --status-unknown");
     }
 
     private static double? Score(string text, int line, string column, IReadOnlyList<string> noResult)
@@ -111,16 +134,18 @@ public static class StudyReader
             return null;
         }
 
-        return double.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out double score) && !double.IsNaN(score)
-            ? score
-            : throw new StudyException(
-                $"column '{column}', line {line}: {Shown(text)} is not a number; declare it with --no-result if it means that there is no result");
+        if (!double.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out double score) || double.IsNaN(score))
+        {
+            throw new StudyException(
+                $"column '{column}', line {line}: {Printable.Quoted(text)} is not a number; declare it with --no-result if it means that there is no result");
+        }
+
+        // Infinity is a score only where it is written as such.
+        return double.IsInfinity(score) && text.Any(char.IsAsciiDigit)
+            ? throw new StudyException($"column '{column}', line {line}: {Printable.Quoted(text)} is beyond the range of numbers; write Infinity or -Infinity if that is meant")
+            : score;
     }
 
-    private static string Field(CsvReader csv, int index) => (csv.GetField(index) ?? string.Empty).Trim();
-
-    private static string Shown(string value) => value.Length == 0 ? "(empty)" : $"'{value}'";
-
-    private static void Count(Dictionary<(string What, string Reason), int> counts, string what, string reason) =>
-        counts[(what, reason)] = counts.GetValueOrDefault((what, reason)) + 1;
+    private static string? Repeated(IEnumerable<string> values) =>
+        values.GroupBy(value => value).FirstOrDefault(group => group.Count() > 1)?.Key;
 }

@@ -219,7 +219,7 @@ internal static class SampleBuilder
                 withoutThrough[level] = j;
             }
 
-            for (; i < with.Length || j < without.Length; )
+            for (; i < with.Length || j < without.Length;)
             {
                 ulong key = i < with.Length ? with[i++] : without[j++];
                 level += key != previous ? 1 : 0;

@@ -104,6 +104,21 @@ public readonly record struct ConfusionMatrix
     public OddsRatio DiagnosticOddsRatio => new(
         Sensitivity, FalsePositiveRate, Positives == 0 ? UndefinedReason.NoPositiveResults : UndefinedReason.NoNegativeResults);
 
+    /// <summary>Gets the mean of sensitivity and specificity. It does not depend on the prevalence. Undefined when a group is empty.</summary>
+    public BalancedAccuracy BalancedAccuracy => new(YoudenIndex);
+
+    /// <summary>Gets the Matthews correlation coefficient. It changes with the prevalence of the sample. Undefined when a margin is empty.</summary>
+    public MatthewsCorrelation MatthewsCorrelation => new(this);
+
+    /// <summary>Gets F1, the F measure that weighs sensitivity and positive predictive value alike. It changes with the prevalence of the sample.</summary>
+    public FMeasure F1 => FBeta(1);
+
+    /// <summary>
+    /// Gets Cohen's kappa between result and status. It changes with the prevalence of the sample; sensitivity and specificity say more. Undefined when
+    /// there are no subjects, or when result and status have one value only.
+    /// </summary>
+    public Kappa CohenKappa => RatingTable.FromCounts([TruePositives, FalsePositives, FalseNegatives, TrueNegatives], 2).CohenKappa();
+
     /// <summary>
     /// Gets the predictive values straight from the table. They hold only for a cohort: subjects enrolled without regard to their status, at
     /// the prevalence of this sample. In a case-control or enriched study they are the product of the enrolment; use
@@ -135,6 +150,48 @@ public readonly record struct ConfusionMatrix
     /// <returns>Both predictive values.</returns>
     /// <remarks>Sensitivity and specificity are taken to be the same among those people as in this study.</remarks>
     public PredictiveValues PredictiveValuesAt(Prevalence prevalence) => new(this, prevalence);
+
+    /// <summary>The predictive values over a series of prevalences, as for a curve.</summary>
+    /// <param name="prevalences">The prevalences, in any order.</param>
+    /// <returns>The predictive values in the order given.</returns>
+    /// <exception cref="ArgumentNullException"><paramref name="prevalences"/> is null.</exception>
+    public IReadOnlyList<PredictiveValues> PredictiveValuesOver(IEnumerable<Prevalence> prevalences)
+    {
+        Guard.NotNull(prevalences);
+        List<PredictiveValues> values = [];
+        foreach (Prevalence prevalence in prevalences)
+        {
+            values.Add(PredictiveValuesAt(prevalence));
+        }
+
+        return values.AsReadOnly();
+    }
+
+    /// <summary>The predictive values at a prevalence that was itself estimated, from other subjects than these.</summary>
+    /// <param name="prevalence">How many of how many had the condition.</param>
+    /// <returns>Both predictive values, whose intervals carry both uncertainties.</returns>
+    public EstimatedPredictiveValues PredictiveValuesAtEstimated(Proportion prevalence) => new(this, prevalence);
+
+    /// <summary>The F measure with another weight of sensitivity.</summary>
+    /// <param name="beta">How many times as much sensitivity weighs as the positive predictive value; finite, above 0.</param>
+    /// <returns>The measure; undefined when there are only true negatives.</returns>
+    /// <exception cref="ArgumentOutOfRangeException"><paramref name="beta"/> is not a finite number above 0.</exception>
+    public FMeasure FBeta(double beta)
+    {
+        Guard.Positive(beta);
+        return new FMeasure(TruePositives, FalsePositives, FalseNegatives, beta);
+    }
+
+    /// <summary>A rectangle that holds sensitivity and specificity together.</summary>
+    /// <param name="confidence">The joint level, and the side on which both are bounded; two-sided 95 % unless said.</param>
+    /// <param name="method">The method of each side; Wilson's score interval unless said.</param>
+    /// <returns>The region; undefined, with the reason, when a group is empty.</returns>
+    /// <exception cref="ArgumentOutOfRangeException"><paramref name="method"/> is not a value of its type.</exception>
+    public JointAccuracyRegion JointRegion(Confidence confidence = default, ProportionMethod method = ProportionMethod.Wilson)
+    {
+        Confidence side = confidence.RootOfTwo();
+        return new JointAccuracyRegion(Sensitivity.Interval(side, method), Specificity.Interval(side, method), confidence);
+    }
 
     /// <summary>What the test is expected to do among so many people at a prevalence, as whole numbers that add up.</summary>
     /// <param name="people">How many people are tested, 0 or more.</param>
