@@ -5,7 +5,7 @@ namespace DiagnosticAccuracy.Tables;
 /// <summary>The generalised score test of equal predictive values.</summary>
 /// <remarks>
 /// <para>Every call is a row: D = 1 when it is right, Z = 1 when it comes from the second test. With means over all rows, the statistic is
-/// (sum D (Z - mean Z))^2 / sum over subjects of (sum over rows (D - mean D) (Z - mean Z))^2, chi-square with one degree of freedom.</para>
+/// (sum D (Z - mean Z))^2 / sum over subjects of (sum over rows (D - mean D) (Z - mean Z))^2, chi-squared with one degree of freedom.</para>
 /// <para>Leisenring, Alonzo and Pepe, Biometrics 2000;56:345.</para>
 /// </remarks>
 internal static class GeneralisedScore

@@ -4,7 +4,7 @@ namespace DiagnosticAccuracy;
 public enum McNemarMethod
 {
     /// <summary>
-    /// (b - c)^2 / (b + c) as chi-square with one degree of freedom, b and c the discordant counts: the default. It rejects at the level alpha exactly
+    /// (b - c)^2 / (b + c) as chi-squared with one degree of freedom, b and c the discordant counts: the default. It rejects at the level alpha exactly
     /// when Tango's interval at 1 - alpha leaves out 0. Its size may exceed the level by little (Fagerland, Lydersen and Laake 2013).
     /// </summary>
     Asymptotic = 0,

@@ -135,7 +135,7 @@ public class McNemarTests
     public void The_text_has_statistic_p_value_and_method()
     {
         PairedTable table = new(1, 1, 7, 12);
-        Assert.Equal("McNemar, asymptotic: chi-square = 4.5, p = 0.0338949", table.McNemar().ToString());
+        Assert.Equal("McNemar, asymptotic: chi-squared 4.5 on 1 degree of freedom, p = 0.0338949", table.McNemar().ToString());
         Assert.Equal("McNemar, mid-P: p = 0.0390625", table.McNemar(McNemarMethod.MidP).ToString());
     }
 }
