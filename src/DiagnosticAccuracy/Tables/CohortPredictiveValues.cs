@@ -11,6 +11,12 @@ namespace DiagnosticAccuracy;
 /// <param name="Negative">The share without the condition among the negative results; undefined when no result is negative.</param>
 public readonly record struct CohortPredictiveValues(Proportion Positive, Proportion Negative)
 {
+    /// <summary>Gets the share without the condition among the positive results, 1 minus the positive predictive value.</summary>
+    public Proportion FalseDiscoveryRate => Positive.Complement;
+
+    /// <summary>Gets the share with the condition among the negative results, 1 minus the negative predictive value.</summary>
+    public Proportion FalseOmissionRate => Negative.Complement;
+
     /// <summary>Both with their counts.</summary>
     /// <returns>The text, in the invariant culture.</returns>
     public override string ToString() => $"positive {Positive}, negative {Negative} (in a cohort)";

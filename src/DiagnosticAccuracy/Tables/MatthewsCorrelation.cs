@@ -33,6 +33,17 @@ public readonly record struct MatthewsCorrelation : IIntervalQuantity
                 return double.NaN;
             }
 
+            // The ends are told by the cells, so that rounding cannot move them.
+            if (_table.FalsePositives == 0 && _table.FalseNegatives == 0)
+            {
+                return 1;
+            }
+
+            if (_table.TruePositives == 0 && _table.TrueNegatives == 0)
+            {
+                return -1;
+            }
+
             // The difference of products is taken exactly.
             BigInteger difference = ((BigInteger)_table.TruePositives * _table.TrueNegatives) - ((BigInteger)_table.FalsePositives * _table.FalseNegatives);
             double scale = Math.Sqrt((double)_table.Positives) * Math.Sqrt((double)_table.Negatives)

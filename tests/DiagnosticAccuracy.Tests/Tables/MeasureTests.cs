@@ -15,12 +15,14 @@ public class MeasureTests
         Assert.Equal(.78049, Example.CohenKappa.Value, 5e-6);
         Assert.Equal(.85714, Example.F1.Value, 5e-6);
         Assert.Equal(.9, Example.BalancedAccuracy.Value, 1e-15);
+        Assert.Equal(new Proportion(20, 110), Example.CohortPredictiveValues.FalseDiscoveryRate);
+        Assert.Equal(new Proportion(10, 190), Example.CohortPredictiveValues.FalseOmissionRate);
     }
 
     [Fact]
-    public void Every_table_of_up_to_ten_subjects_answers_or_says_why_not()
+    public void Every_table_of_up_to_30_subjects_answers_or_says_why_not()
     {
-        foreach (ConfusionMatrix table in ConfusionMatrixTests.TablesOf(10))
+        foreach (ConfusionMatrix table in ConfusionMatrixTests.TablesOf(30))
         {
             IIntervalQuantity[] quantities =
             [
