@@ -32,4 +32,7 @@ public enum UndefinedCause
 
     /// <summary>The chosen method has no answer at this boundary; the explanation names one that has.</summary>
     MethodHasNoLimit,
+
+    /// <summary>The chosen method has no such quantity, as an exact test has no statistic.</summary>
+    NotPartOfMethod,
 }

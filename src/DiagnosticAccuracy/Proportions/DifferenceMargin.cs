@@ -4,10 +4,11 @@ using DiagnosticAccuracy.Proportions;
 namespace DiagnosticAccuracy;
 
 /// <summary>
-/// A margin that a difference of two independent proportions has to exceed: stated first, then tested against the counts.
+/// A margin that a difference of two proportions has to exceed: stated first, then tested against the counts, of independent groups or of
+/// two tests on the same subjects.
 /// </summary>
 /// <remarks>
-/// <para>Greater is better for the first proportion, as with the sensitivity of a new test against a comparator on other subjects. Where less is
+/// <para>Greater is better for the first proportion, as with the sensitivity of a new test against a comparator. Where less is
 /// better, swap the two.</para>
 /// <para><c>default(DifferenceMargin)</c> is superiority: the difference has to exceed 0.</para>
 /// </remarks>
@@ -42,7 +43,7 @@ public readonly record struct DifferenceMargin
         return new DifferenceMargin(margin);
     }
 
-    /// <summary>The one-sided score test of "the difference is not above the bound".</summary>
+    /// <summary>The one-sided score test of "the difference is not above the bound", for independent groups.</summary>
     /// <param name="difference">The observed difference.</param>
     /// <returns>The statistic, the p-value and the interval that agrees with them; undefined, with the reason, where the difference is.</returns>
     /// <remarks>
