@@ -1,7 +1,7 @@
 namespace DiagnosticAccuracy;
 
 /// <summary>
-/// The two margins between which a difference of two proportions has to lie to be called equivalent: stated first, then tested against the counts.
+/// The two margins between which a difference of two proportions (or of two areas under ROC curves) has to lie to be called equivalent: stated first, then tested against the counts.
 /// </summary>
 /// <remarks><c>default(DifferenceEquivalenceMargins)</c> leaves no room: both bounds are 0, and no difference lies between them.</remarks>
 public readonly record struct DifferenceEquivalenceMargins

@@ -4,8 +4,8 @@ using DiagnosticAccuracy.Proportions;
 namespace DiagnosticAccuracy;
 
 /// <summary>
-/// A margin that a difference of two proportions has to exceed: stated first, then tested against the counts, of independent groups or of
-/// two tests on the same subjects.
+/// A margin that a difference of two proportions (or of two areas under ROC curves) has to exceed: stated first, then tested against the
+/// data, of independent groups or of two tests on the same subjects.
 /// </summary>
 /// <remarks>
 /// <para>Greater is better for the first proportion, as with the sensitivity of a new test against a comparator. Where less is

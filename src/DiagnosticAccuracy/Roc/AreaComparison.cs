@@ -12,7 +12,7 @@ public sealed class AreaComparison
         Second = second;
         Difference = difference;
         Covariance = covariance;
-        Z = Standardised(difference);
+        Z = difference.Standardised(difference.Value);
         PValue = Z.IsDefined ? Quantity.Of(StandardNormal.TwoSided(Z.Value)) : Z;
         Correlation = FindCorrelation(first, second, covariance);
     }
@@ -44,23 +44,6 @@ public sealed class AreaComparison
     /// <summary>For example "difference 0.155882, z 2.72206, p 0.00648755".</summary>
     /// <returns>The text, in the invariant culture.</returns>
     public override string ToString() => $"difference {Difference}, z {Z}, p {PValue}";
-
-    private static Quantity Standardised(AreaDifference difference)
-    {
-        if (!difference.IsDefined)
-        {
-            return Quantity.Undefined(difference.WhyUndefined!);
-        }
-
-        if (!difference.StandardError.IsDefined)
-        {
-            return difference.StandardError;
-        }
-
-        return difference.StandardError.Value == 0
-            ? Quantity.Undefined(AreaDifference.ZeroVariance)
-            : Quantity.Of(difference.Value / difference.StandardError.Value);
-    }
 
     private static Quantity FindCorrelation(AreaUnderCurve first, AreaUnderCurve second, Quantity covariance)
     {

@@ -77,7 +77,7 @@ internal static class RankSumTest
     /// </summary>
     private static ChanceTest Exact(ScoredSample sample, Alternative alternative)
     {
-        Quantity notStandardised = Quantity.Undefined(UndefinedCause.MethodHasNoLimit, "the exact test does not standardise");
+        Quantity notStandardised = Quantity.Undefined(UndefinedCause.NotPartOfMethod, "the exact test does not standardise");
         bool smallerIsWith = sample.WithCondition <= sample.WithoutCondition;
         long size = Math.Min(sample.WithCondition, sample.WithoutCondition);
 

@@ -6,8 +6,8 @@ namespace DiagnosticAccuracy;
 /// <summary>Comparisons of ROC curves.</summary>
 public static class RocComparison
 {
-    /// <summary>The areas of two tests on the same subjects.</summary>
-    /// <param name="scores">The scores of both tests.</param>
+    /// <summary>The areas of the first two tests on the same subjects.</summary>
+    /// <param name="scores">The scores; of more than two tests the first two are compared, see <see cref="PairedAreas"/> for all.</param>
     /// <returns>The comparison.</returns>
     /// <exception cref="ArgumentNullException"><paramref name="scores"/> is null.</exception>
     /// <remarks>
@@ -17,8 +17,11 @@ public static class RocComparison
     public static AreaComparison Paired(PairedScores scores)
     {
         Guard.NotNull(scores);
-        Placements first = scores.FirstPlacements;
-        Placements second = scores.SecondPlacements;
+        return PairedPlacements(scores.PlacementsOf(0, nameof(scores)), scores.PlacementsOf(1, nameof(scores)));
+    }
+
+    internal static AreaComparison PairedPlacements(Placements first, Placements second)
+    {
         AreaUnderCurve firstArea = first.Area;
         AreaUnderCurve secondArea = second.Area;
         if (!firstArea.Variance.IsDefined)

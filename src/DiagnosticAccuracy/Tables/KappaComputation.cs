@@ -138,7 +138,7 @@ internal static class KappaComputation
         return new Kappa(
             Quantity.Of(coefficient),
             Quantity.Of(Math.Sqrt(variance) / (1 - expected)),
-            Quantity.Undefined(UndefinedCause.MethodHasNoLimit, "this coefficient has no test against chance"),
+            Quantity.Undefined(UndefinedCause.NotPartOfMethod, "this coefficient has no test against chance"),
             method);
     }
 

@@ -156,7 +156,7 @@ public sealed class RatingTable
     {
         if (Categories != 2)
         {
-            return Quantity.Undefined(UndefinedCause.MethodHasNoLimit, "the prevalence index is for two categories");
+            return Quantity.Undefined(UndefinedCause.NotPartOfMethod, "the prevalence index is for two categories");
         }
 
         return Total == 0
