@@ -55,6 +55,11 @@ public sealed class RocCurve
         return new OperatingPoint(cutoff, TableAt(cutoff.Score is { } score ? LevelsPositiveAt(score) : 0));
     }
 
+    /// <summary>The area in a part of the square that was stated beforehand.</summary>
+    /// <param name="range">The part, which names the definition.</param>
+    /// <returns>The partial area, raw and standardised; undefined, with the reason, when a group is empty.</returns>
+    public PartialArea PartialArea(PartialAreaRange range) => PartialAreas.Of(Sample, range);
+
     /// <summary>The test that the scores do not tell the groups apart: Mann-Whitney, with ties.</summary>
     /// <param name="method">The method; the normal approximation with the variance corrected for ties unless said.</param>
     /// <param name="alternative">Two-sided unless said; greater means that the area is above one half.</param>
