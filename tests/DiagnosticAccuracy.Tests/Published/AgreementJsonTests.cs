@@ -78,6 +78,18 @@ public class AgreementJsonTests
         Assert.Equal(.32, Table(Expected.GetProperty("kappa_feinstein_b")).CohenKappa().Value, 5e-3);
     }
 
+    /// <summary>
+    /// The table with which Gwet showed what a rare category does to kappa: kappa -.0234, AC1 .9408. Table and values from memory (grade M: the recomputation
+    /// agrees to the printed digits).
+    /// </summary>
+    [Fact]
+    public void First_order_agreement_where_kappa_is_negative()
+    {
+        RatingTable table = RatingTable.FromCounts([118, 5, 2, 0], 2);
+        Assert.Equal(-.0234, table.CohenKappa().Value, 5e-5);
+        Assert.Equal(.9408, table.FirstOrderAgreementCoefficient.Value, 5e-5);
+    }
+
     /// <summary>The six tables of Chicco and Jurman, BMC Genomics 2020;21:6, rebuilt from memory (grade M): TP, FN, TN, FP.</summary>
     [Theory]
     [InlineData("A1", 90, 1, 0, 9)]

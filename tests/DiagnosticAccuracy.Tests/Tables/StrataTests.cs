@@ -221,6 +221,7 @@ public class StrataTests
     [Fact]
     public void Pairs_of_small_strata_answer_or_say_why_not()
     {
+        Confidence wider = Confidence.TwoSided(0.99);
         ConfusionMatrix[] tables = [.. ConfusionMatrixTests.TablesOf(4)];
         foreach (ConfusionMatrix first in tables)
         {
@@ -240,6 +241,8 @@ public class StrataTests
                     Assert.True(!interval.IsDefined || interval.Contains(quantity.Value), $"{first} {second} {quantity} {interval}");
                     Assert.True(!interval.IsDefined || interval.Lower < interval.Upper, $"{first} {second} {quantity} {interval}");
                     Assert.True(interval.Lower is double.NaN or >= 0);
+                    ConfidenceInterval wide = quantity.Interval(wider);
+                    Assert.True(!interval.IsDefined || (wide.Lower <= interval.Lower && interval.Upper <= wide.Upper), $"{first} {second} {interval} {wide}");
                 }
 
                 foreach (HomogeneityTest test in new[] { strata.OddsRatioHomogeneity, strata.SensitivityHomogeneity, strata.SpecificityHomogeneity })
