@@ -12,7 +12,7 @@ Console.WriteLine($"PPA with the other as comparator {table.Swapped.PositivePerc
 RatingTable ratings = table.ToRatingTable();
 Kappa kappa = ratings.CohenKappa();
 Console.WriteLine($"kappa {kappa}, {kappa.Interval()}");
-Console.WriteLine($"PABAK {ratings.PrevalenceAndBiasAdjustedKappa}, AC1 {ratings.FirstOrderAgreementCoefficient}");
+Console.WriteLine($"PABAK {ratings.PrevalenceAndBiasAdjustedKappa}, AC1 {ratings.FirstOrderAgreementCoefficient}, Scott's pi {ratings.ScottPi}");
 Console.WriteLine($"agreement on positive {ratings.SpecificAgreement(0)}, on negative {ratings.SpecificAgreement(1)}");
 
 // Two readers grade 120 culture plates as no, some or heavy growth.

@@ -14,6 +14,10 @@ Console.WriteLine(table.ExpectedFor(100_000, new Prevalence(0.002)));
 EstimatedPredictiveValues estimated = table.PredictiveValuesAtEstimated(new Proportion(9, 4200));
 Console.WriteLine($"positive {estimated.Positive}, {estimated.Positive.Interval()}");
 
+// Or it was reported with an interval, here by a surveillance system.
+EstimatedPrevalence reported = new(new Prevalence(0.0022), new ConfidenceInterval(0.0012, 0.0041, Confidence.TwoSided(0.95), "as reported"));
+Console.WriteLine($"positive {table.PredictiveValuesAtEstimated(reported).Positive.Interval()}");
+
 foreach (PredictiveValues at in table.PredictiveValuesOver([new Prevalence(0.0005), new Prevalence(0.002), new Prevalence(0.01)]))
 {
     Console.WriteLine(at);

@@ -16,3 +16,7 @@ Console.WriteLine($"LR+ {centres.PositiveLikelihoodRatio}, {centres.PositiveLike
 Console.WriteLine($"odds ratio {centres.DiagnosticOddsRatio}, {centres.DiagnosticOddsRatio.Interval()}");
 Console.WriteLine(centres.OddsRatioHomogeneity);
 Console.WriteLine(centres.SensitivityHomogeneity);
+
+// At a stricter cutoff no centre had a false positive: the ratio is infinite, its lower limit is not.
+StratifiedTables strict = StratifiedTables.Create([new(24, 0, 7, 145), new(11, 0, 5, 114), new(9, 0, 2, 83)]);
+Console.WriteLine($"LR+ {strict.PositiveLikelihoodRatio}, {strict.PositiveLikelihoodRatio.Interval()}");

@@ -20,6 +20,13 @@ internal readonly struct RatioScore(Proportion first, Proportion second, double 
 
     public double Statistic(double ratio)
     {
+        RatioScoreParts parts = Parts(ratio);
+        return parts.Difference == 0 ? 0 : parts.Difference / Math.Sqrt(parts.Variance);
+    }
+
+    /// <summary>What the statistic is made of.</summary>
+    public RatioScoreParts Parts(double ratio)
+    {
         double n1 = first.Trials;
         double n2 = second.Trials;
         double f1 = first.Failures;
@@ -47,7 +54,7 @@ internal readonly struct RatioScore(Proportion first, Proportion second, double 
             difference = equal - (excess * second.Value);
         }
 
-        return difference == 0 ? 0 : difference / Math.Sqrt(variance);
+        return new RatioScoreParts(difference, variance);
     }
 
     // The larger root of a q^2 - b q + c = 0 with the root of its discriminant.

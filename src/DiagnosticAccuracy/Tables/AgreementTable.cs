@@ -1,3 +1,5 @@
+using DiagnosticAccuracy.Tables;
+
 namespace DiagnosticAccuracy;
 
 /// <summary>
@@ -66,6 +68,29 @@ public readonly record struct AgreementTable
 
     /// <summary>Gets the table with the other test as the comparator.</summary>
     public AgreementTable Swapped => new(BothPositive, ComparatorOnlyPositive, TestOnlyPositive, BothNegative);
+
+    /// <summary>The table of any sequence of rows.</summary>
+    /// <typeparam name="T">The type of a row.</typeparam>
+    /// <param name="rows">The rows, one a subject; they are read once.</param>
+    /// <param name="test">Gives whether the test was positive.</param>
+    /// <param name="comparator">Gives whether the comparator was positive.</param>
+    /// <returns>The table; empty for no rows.</returns>
+    /// <exception cref="ArgumentNullException">An argument is null.</exception>
+    /// <remarks>A subject without a valid result of both has no place here: leave it out, or decide how it counts, and report the number.</remarks>
+    public static AgreementTable FromRows<T>(IEnumerable<T> rows, Func<T, bool> test, Func<T, bool> comparator)
+    {
+        Guard.NotNull(rows);
+        Guard.NotNull(test);
+        Guard.NotNull(comparator);
+        PairedCounter counter = default;
+        foreach (T row in rows)
+        {
+            counter.Count(test(row), comparator(row));
+        }
+
+        PairedTable counted = counter.ToTable();
+        return new AgreementTable(counted.BothPositive, counted.FirstOnly, counted.SecondOnly, counted.BothNegative);
+    }
 
     /// <summary>The cross table of the two ratings, for kappa and its relatives.</summary>
     /// <returns>The cross table, positive first; rows are the test, columns the comparator.</returns>

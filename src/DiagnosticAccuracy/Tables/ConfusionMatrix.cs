@@ -1,3 +1,5 @@
+using DiagnosticAccuracy.Tables;
+
 namespace DiagnosticAccuracy;
 
 /// <summary>
@@ -135,6 +137,48 @@ public readonly record struct ConfusionMatrix
     /// <exception cref="OverflowException">The cells add up to more than <see cref="long.MaxValue"/>.</exception>
     public static ConfusionMatrix operator +(ConfusionMatrix left, ConfusionMatrix right) => left.Add(right);
 
+    /// <summary>The table of results, one element a subject in each argument.</summary>
+    /// <param name="isPositive">Whether the test was positive.</param>
+    /// <param name="hasCondition">Whether the subject has the condition by the reference standard, in the same order of subjects.</param>
+    /// <returns>The table; empty for no subjects.</returns>
+    /// <exception cref="ArgumentException">The lengths differ.</exception>
+    public static ConfusionMatrix Create(ReadOnlySpan<bool> isPositive, ReadOnlySpan<bool> hasCondition)
+    {
+        Guard.SameLength(hasCondition.Length, isPositive.Length, nameof(hasCondition), nameof(isPositive));
+        PairedCounter counter = default;
+        for (int i = 0; i < isPositive.Length; i++)
+        {
+            counter.Count(isPositive[i], hasCondition[i]);
+        }
+
+        return Of(counter.ToTable());
+    }
+
+    /// <summary>The table of any sequence of rows.</summary>
+    /// <typeparam name="T">The type of a row.</typeparam>
+    /// <param name="rows">The rows, one a subject; they are read once.</param>
+    /// <param name="isPositive">Gives whether the test was positive.</param>
+    /// <param name="hasCondition">Gives whether the subject has the condition by the reference standard.</param>
+    /// <returns>The table; empty for no rows.</returns>
+    /// <exception cref="ArgumentNullException">An argument is null.</exception>
+    /// <remarks>
+    /// A subject without a valid result of the test and of the reference standard has no place here: leave it out, or decide how it counts, and
+    /// report the number.
+    /// </remarks>
+    public static ConfusionMatrix FromRows<T>(IEnumerable<T> rows, Func<T, bool> isPositive, Func<T, bool> hasCondition)
+    {
+        Guard.NotNull(rows);
+        Guard.NotNull(isPositive);
+        Guard.NotNull(hasCondition);
+        PairedCounter counter = default;
+        foreach (T row in rows)
+        {
+            counter.Count(isPositive(row), hasCondition(row));
+        }
+
+        return Of(counter.ToTable());
+    }
+
     /// <summary>The table of these subjects and others together, cell by cell.</summary>
     /// <param name="other">The table of other subjects.</param>
     /// <returns>The sum.</returns>
@@ -170,7 +214,12 @@ public readonly record struct ConfusionMatrix
     /// <summary>The predictive values at a prevalence that was itself estimated, from other subjects than these.</summary>
     /// <param name="prevalence">How many of how many had the condition.</param>
     /// <returns>Both predictive values, whose intervals carry both uncertainties.</returns>
-    public EstimatedPredictiveValues PredictiveValuesAtEstimated(Proportion prevalence) => new(this, prevalence);
+    public EstimatedPredictiveValues PredictiveValuesAtEstimated(Proportion prevalence) => new(this, new EstimatedPrevalence(prevalence));
+
+    /// <summary>The predictive values at a prevalence that was itself estimated, from other subjects than these.</summary>
+    /// <param name="prevalence">The estimate, from counts or as reported with its interval.</param>
+    /// <returns>Both predictive values, whose intervals carry both uncertainties.</returns>
+    public EstimatedPredictiveValues PredictiveValuesAtEstimated(EstimatedPrevalence prevalence) => new(this, prevalence);
 
     /// <summary>The F measure with another weight of sensitivity.</summary>
     /// <param name="beta">How many times as much sensitivity weighs as the positive predictive value; finite, above 0.</param>
@@ -208,4 +257,7 @@ public readonly record struct ConfusionMatrix
     /// <returns>For example "TP 90, FP 20, FN 10, TN 180".</returns>
     public override string ToString() =>
         $"TP {Display.Of(TruePositives)}, FP {Display.Of(FalsePositives)}, FN {Display.Of(FalseNegatives)}, TN {Display.Of(TrueNegatives)}";
+
+    private static ConfusionMatrix Of(PairedTable resultByStatus) =>
+        new(resultByStatus.BothPositive, resultByStatus.FirstOnly, resultByStatus.SecondOnly, resultByStatus.BothNegative);
 }

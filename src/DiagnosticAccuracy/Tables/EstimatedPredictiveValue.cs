@@ -1,16 +1,22 @@
+using DiagnosticAccuracy.Proportions;
+
 namespace DiagnosticAccuracy;
 
 /// <summary>A predictive value at a prevalence that was estimated, with an interval that carries both uncertainties.</summary>
 /// <remarks><c>default(EstimatedPredictiveValue)</c> is undefined.</remarks>
 public readonly record struct EstimatedPredictiveValue : IIntervalQuantity
 {
-    private const string Name = "variance recovery (MOVER) on the log odds, from the log interval of the ratio and the Wilson interval of the prevalence";
-    private const string RectangleName = "rectangle of the score (Koopman) interval of the ratio and the Wilson interval of the prevalence, since the log odds are infinite";
+    private const string Start = "variance recovery (MOVER) on the log odds, from the ";
+    private const string End = " interval of the ratio and the interval of the prevalence";
+    private const string Name = Start + LogRatio.Name + End;
+    private const string FullName = Start + ScoreRatio.KoopmanName + End + ", since the log method of the ratio has no width when every result is alike";
+    private const string RectangleName =
+        "rectangle of the " + ScoreRatio.KoopmanName + End + ", since the log odds are infinite";
 
     private readonly ProportionRatio _ratio;
-    private readonly Proportion _prior;
+    private readonly EstimatedPrevalence _prior;
 
-    internal EstimatedPredictiveValue(ProportionRatio ratio, Proportion prior)
+    internal EstimatedPredictiveValue(ProportionRatio ratio, EstimatedPrevalence prior)
     {
         _ratio = ratio;
         _prior = prior;
@@ -23,11 +29,9 @@ public readonly record struct EstimatedPredictiveValue : IIntervalQuantity
     public double Value => _prior.IsDefined ? AtKnown.Value : double.NaN;
 
     /// <inheritdoc/>
-    public UndefinedReason? WhyUndefined => _prior.IsDefined
-        ? AtKnown.WhyUndefined
-        : new UndefinedReason(UndefinedCause.NoSubjects, "the prevalence was estimated from no subjects");
+    public UndefinedReason? WhyUndefined => _prior.WhyUndefined ?? AtKnown.WhyUndefined;
 
-    private PredictiveValue AtKnown => new(_ratio, _prior.Value);
+    private PredictiveValue AtKnown => new(_ratio, _prior.Value, _prior.Against);
 
     /// <summary>
     /// A confidence interval; it lies within 0 to 1 and contains the value. The log odds of the predictive value are those of the prevalence plus the
@@ -36,7 +40,8 @@ public readonly record struct EstimatedPredictiveValue : IIntervalQuantity
     /// <param name="confidence">Level and side; two-sided 95 % unless said.</param>
     /// <returns>
     /// The interval. Where one of the parts is 0 or infinite on the log scale, the limits are the predictive values at the corners of a rectangle, each
-    /// side at the square root of the level, which is conservative; the method says so. Undefined, with the reason, where the value is.
+    /// side at the square root of the level, which is conservative; the method says so. Undefined, with the reason, where the value is, and where
+    /// the interval of a reported prevalence is.
     /// </returns>
     /// <remarks>Source: Zou and Donner, Stat Med 2008;27:1693, for the recovery of variances; its use for this product is this library's.</remarks>
     public ConfidenceInterval Interval(Confidence confidence = default)
@@ -46,7 +51,7 @@ public readonly record struct EstimatedPredictiveValue : IIntervalQuantity
             return ConfidenceInterval.Undefined(reason, confidence, Name);
         }
 
-        return _ratio.Numerator.Successes == 0 || _ratio.Denominator.Successes == 0 || _prior.Successes == 0 || _prior.Failures == 0
+        return _ratio.Numerator.Successes == 0 || _ratio.Denominator.Successes == 0 || _prior.Value == 0 || _prior.Against == 0
             ? Rectangle(confidence)
             : Recovered(confidence);
     }
@@ -73,7 +78,8 @@ public readonly record struct EstimatedPredictiveValue : IIntervalQuantity
             upper = FromLogit(logRatio + logit + Hypotenuse(Math.Log(ratio.Upper) - logRatio, Logit(prior.Upper) - logit));
         }
 
-        return new ConfidenceInterval(Math.Min(lower, Value), Math.Max(upper, Value), confidence, Name);
+        return new ConfidenceInterval(
+            Math.Min(lower, Value), Math.Max(upper, Value), confidence, ratio.Method == LogRatio.Name ? Name : FullName);
     }
 
     private ConfidenceInterval Rectangle(Confidence confidence)
@@ -81,6 +87,11 @@ public readonly record struct EstimatedPredictiveValue : IIntervalQuantity
         Confidence side = confidence.RootOfTwo();
         ConfidenceInterval ratio = _ratio.Interval(side, RatioMethod.Koopman);
         ConfidenceInterval prior = _prior.Interval(side);
+        if (prior.WhyUndefined is { } reason)
+        {
+            return ConfidenceInterval.Undefined(reason, confidence, RectangleName);
+        }
+
         return new ConfidenceInterval(
             confidence.HasLower ? At(ratio.Lower, prior.Lower, 0) : 0,
             confidence.HasUpper ? At(ratio.Upper, prior.Upper, 1) : 1,

@@ -1,10 +1,10 @@
 namespace DiagnosticAccuracy;
 
-/// <summary>The predictive values of a test at a prevalence that was estimated from other subjects.</summary>
+/// <summary>The predictive values of a test at a prevalence that was estimated, from other subjects.</summary>
 /// <remarks><c>default(EstimatedPredictiveValues)</c> is undefined.</remarks>
 public readonly record struct EstimatedPredictiveValues
 {
-    internal EstimatedPredictiveValues(ConfusionMatrix table, Proportion prevalence)
+    internal EstimatedPredictiveValues(ConfusionMatrix table, EstimatedPrevalence prevalence)
     {
         Table = table;
         Prevalence = prevalence;
@@ -14,7 +14,7 @@ public readonly record struct EstimatedPredictiveValues
     public ConfusionMatrix Table { get; }
 
     /// <summary>Gets the estimated prevalence.</summary>
-    public Proportion Prevalence { get; }
+    public EstimatedPrevalence Prevalence { get; }
 
     /// <summary>Gets the positive predictive value.</summary>
     public EstimatedPredictiveValue Positive => new(Table.PositiveLikelihoodRatio, Prevalence);

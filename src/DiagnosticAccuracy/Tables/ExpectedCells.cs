@@ -9,7 +9,8 @@ namespace DiagnosticAccuracy;
 /// <remarks>
 /// <para>The four expectations are rounded together by the method of largest remainders, in exact arithmetic: each is rounded down, and the people
 /// still missing go to the cells with the largest fractions. Equal fractions are served in the order false negatives, false
-/// positives, true positives, true negatives, so that a tie shows an error rather than hides it.</para>
+/// positives, true positives, true negatives, so that a tie shows an error rather than hides it. The prevalence is read as the decimal number
+/// it prints as: 0.15 is fifteen hundredths, not the binary number next to it.</para>
 /// <para><c>default(ExpectedCells)</c> is undefined: its table is empty.</para>
 /// </remarks>
 public readonly record struct ExpectedCells
@@ -103,12 +104,13 @@ public readonly record struct ExpectedCells
 
     private static ConfusionMatrix Round(ConfusionMatrix table, long people, double prevalence)
     {
-        // Everything over one denominator: the prevalence is an integer over a power of two, the rates have the group sizes below them.
-        BigInteger with = BinaryFraction.Numerator(prevalence);
-        BigInteger without = BinaryFraction.Denominator - with;
+        // Everything over one denominator: the prevalence is an integer over a power of ten, the rates have the group sizes below them.
+        DecimalFraction fraction = DecimalFraction.Of(prevalence);
+        BigInteger with = fraction.Numerator;
+        BigInteger without = fraction.Denominator - with;
         BigInteger n1 = Math.Max(1, table.WithCondition);
         BigInteger n0 = Math.Max(1, table.WithoutCondition);
-        BigInteger denominator = BinaryFraction.Denominator * n1 * n0;
+        BigInteger denominator = fraction.Denominator * n1 * n0;
         BigInteger[] numerators =
         [
             people * with * table.FalseNegatives * n0,

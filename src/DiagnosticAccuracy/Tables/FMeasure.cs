@@ -36,16 +36,21 @@ public readonly record struct FMeasure : IIntervalQuantity
     /// Gets (1 + beta^2) TP / ((1 + beta^2) TP + beta^2 FN + FP) (van Rijsbergen, Information Retrieval, 1979). Undefined when there are only true
     /// negatives.
     /// </summary>
-    public double Value => IsDefined ? Favourable / (Favourable + Unfavourable) : double.NaN;
+    public double Value => !IsDefined ? double.NaN
+        : _truePositives == 0 ? 0
+        : _truePositives / (_truePositives + Unfavourable);
 
     /// <inheritdoc/>
     public UndefinedReason? WhyUndefined => _truePositives == 0 && _falsePositives == 0 && _falseNegatives == 0
         ? new UndefinedReason(UndefinedCause.ZeroOverZero, "no subject has the condition and no result is positive")
         : null;
 
-    private double Favourable => (1 + (Beta * Beta)) * _truePositives;
+    // beta^2 / (1 + beta^2) and 1 / (1 + beta^2), which no weight takes out of the range of a double.
+    private double NegativeWeight => 1 / (1 + (1 / (Beta * Beta)));
 
-    private double Unfavourable => (Beta * Beta * _falseNegatives) + _falsePositives;
+    private double PositiveWeight => 1 / (1 + (Beta * Beta));
+
+    private double Unfavourable => (NegativeWeight * _falseNegatives) + (PositiveWeight * _falsePositives);
 
     /// <summary>A confidence interval; it lies within 0 to 1.</summary>
     /// <param name="confidence">Level and side; two-sided 95 % unless said.</param>
@@ -68,7 +73,8 @@ public readonly record struct FMeasure : IIntervalQuantity
             return new ConfidenceInterval(2 * part.Lower / (1 + part.Lower), 2 * part.Upper / (1 + part.Upper), confidence, name);
         }
 
-        if (Favourable == 0 || Unfavourable == 0)
+        double against = Unfavourable;
+        if (_truePositives == 0 || against == 0)
         {
             return ConfidenceInterval.Undefined(
                 new UndefinedReason(UndefinedCause.MethodHasNoLimit, "the logit interval has no limits at an F measure of 0 or 1; that of F1 has"),
@@ -76,12 +82,13 @@ public readonly record struct FMeasure : IIntervalQuantity
                 name);
         }
 
-        double square = Beta * Beta;
-        double variance = (1.0 / _truePositives) + (((square * square * _falseNegatives) + _falsePositives) / (Unfavourable * Unfavourable));
+        double variance = (1.0 / _truePositives)
+            + (NegativeWeight / against * (NegativeWeight / against) * _falseNegatives)
+            + (PositiveWeight / against * (PositiveWeight / against) * _falsePositives);
         double factor = Math.Exp(StandardNormal.UpperQuantile(confidence.Tail) * Math.Sqrt(variance));
         return new ConfidenceInterval(
-            confidence.HasLower ? Favourable / (Favourable + (Unfavourable * factor)) : 0,
-            confidence.HasUpper ? Favourable / (Favourable + (Unfavourable / factor)) : 1,
+            confidence.HasLower ? _truePositives / (_truePositives + (against * factor)) : 0,
+            confidence.HasUpper ? _truePositives / (_truePositives + (against / factor)) : 1,
             confidence,
             name);
     }

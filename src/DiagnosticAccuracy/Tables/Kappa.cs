@@ -7,11 +7,13 @@ namespace DiagnosticAccuracy;
 public readonly record struct Kappa : IIntervalQuantity
 {
     private readonly Quantity _value;
+    private readonly double _least;
     private readonly string? _method;
 
-    internal Kappa(Quantity value, Quantity standardError, Quantity nullStandardError, string method)
+    internal Kappa(Quantity value, Quantity standardError, Quantity nullStandardError, string method, double least = -1)
     {
         _value = value;
+        _least = least;
         StandardError = standardError;
         NullStandardError = nullStandardError;
         _method = method;
@@ -20,7 +22,7 @@ public readonly record struct Kappa : IIntervalQuantity
     /// <inheritdoc/>
     public bool IsDefined => _value.IsDefined;
 
-    /// <summary>Gets the coefficient, at most 1.</summary>
+    /// <summary>Gets the coefficient, from -1 to 1; with weights of one's own it may be less than -1.</summary>
     public double Value => _value.Value;
 
     /// <inheritdoc/>
@@ -40,7 +42,10 @@ public readonly record struct Kappa : IIntervalQuantity
     /// <summary>Gets the two-sided p-value of "agreement is by chance".</summary>
     public Quantity PValue => Z.IsDefined ? Quantity.Of(StandardNormal.TwoSided(Z.Value)) : Z;
 
-    /// <summary>The coefficient plus and minus a multiple of its standard error, cut at -1 and 1.</summary>
+    /// <summary>
+    /// The coefficient plus and minus a multiple of its standard error, cut at -1 and 1; with weights of one's own at 1 only, since the coefficient
+    /// has no least value then.
+    /// </summary>
     /// <param name="confidence">Level and side; two-sided 95 % unless said.</param>
     /// <returns>The interval; undefined where the coefficient is, and where its standard error is zero.</returns>
     public ConfidenceInterval Interval(Confidence confidence = default)
@@ -61,8 +66,8 @@ public readonly record struct Kappa : IIntervalQuantity
 
         double margin = StandardNormal.UpperQuantile(confidence.Tail) * StandardError.Value;
         return new ConfidenceInterval(
-            confidence.HasLower ? Math.Min(1, Math.Max(-1, Value - margin)) : -1,
-            confidence.HasUpper ? Math.Max(-1, Math.Min(1, Value + margin)) : 1,
+            confidence.HasLower ? Math.Min(1, Math.Max(_least, Value - margin)) : _least,
+            confidence.HasUpper ? Math.Max(_least, Math.Min(1, Value + margin)) : 1,
             confidence,
             name);
     }

@@ -1,79 +1,45 @@
 namespace DiagnosticAccuracy.Tables;
 
 /// <summary>Coefficients of agreement of two ratings and their standard errors.</summary>
+/// <remarks>
+/// All are computed from disagreement, not from one minus agreement, so that a category which nearly everybody is in costs no digits.
+/// </remarks>
 internal static class KappaComputation
 {
+    // What is left of a variance below this share of its terms is rounding.
+    private const double Rounding = 1e-14;
+
     private static readonly UndefinedReason OnlyChance = new(
         UndefinedCause.ZeroOverZero, "chance alone would agree fully, as when both ratings use one category only");
 
-    /// <summary>
-    /// kappa = (po - pe) / (1 - pe), po and pe weighted. With m(ij) = w(i.) + w(.j) the sum of the mean weights of row and column, n (1 - pe)^2 times the
-    /// variance is sum p(ij) (w(ij) - m(ij) (1 - kappa))^2 - (kappa - pe (1 - kappa))^2, and by chance sum p(i.) p(.j) (w(ij) - m(ij))^2 - pe^2.
-    /// </summary>
     public static Kappa Cohen(RatingTable table, KappaWeights weights)
     {
         string method = $"Wald with the standard error of Fleiss, Cohen and Everitt ({weights.Name})";
-        int k = table.Categories;
-        weights.CheckCategories(k);
-        double[][] w = new double[k][];
-        for (int i = 0; i < k; i++)
-        {
-            w[i] = new double[k];
-            for (int j = 0; j < k; j++)
-            {
-                w[i][j] = weights.Of(i, j, k);
-            }
-        }
-
+        weights.CheckCategories(table.Categories, nameof(weights));
         if (table.Total == 0)
         {
             return Undefined(UndefinedReason.NoSubjects, method);
         }
 
         double n = table.Total;
-        double[] first = Shares(k, table.FirstTotal, n);
-        double[] second = Shares(k, table.SecondTotal, n);
-        double[] rowMean = new double[k];
-        double[] columnMean = new double[k];
-        double observed = 0;
-        double expected = 0;
-        for (int i = 0; i < k; i++)
-        {
-            for (int j = 0; j < k; j++)
-            {
-                rowMean[i] += w[i][j] * second[j];
-                columnMean[j] += w[i][j] * first[i];
-                observed += w[i][j] * (table[i, j] / n);
-                expected += w[i][j] * first[i] * second[j];
-            }
-        }
-
-        if (IsOneCategory(table) || 1 - expected <= 0)
-        {
-            return Undefined(OnlyChance, method);
-        }
-
-        double kappa = (observed - expected) / (1 - expected);
-        double spread = 0;
-        double chanceSpread = 0;
-        for (int i = 0; i < k; i++)
-        {
-            for (int j = 0; j < k; j++)
-            {
-                double mean = rowMean[i] + columnMean[j];
-                spread += table[i, j] / n * Square(w[i][j] - (mean * (1 - kappa)));
-                chanceSpread += first[i] * second[j] * Square(w[i][j] - mean);
-            }
-        }
-
-        spread -= Square(kappa - (expected * (1 - kappa)));
-        chanceSpread -= expected * expected;
-        double scale = Math.Sqrt(n) * (1 - expected);
-        return new Kappa(
-            Quantity.Of(kappa),
-            Quantity.Of(table.ObservedAgreement.Failures == 0 ? 0 : Math.Sqrt(Math.Max(0, spread)) / scale),
-            Quantity.Of(Math.Sqrt(Math.Max(0, chanceSpread)) / scale),
+        return Chance(
+            table,
+            weights,
+            Shares(table.Categories, category => table.FirstTotal(category) / n),
+            Shares(table.Categories, category => table.SecondTotal(category) / n),
             method);
+    }
+
+    public static Kappa Scott(RatingTable table)
+    {
+        const string method = "Wald with the delta-method standard error";
+        if (table.Total == 0)
+        {
+            return Undefined(UndefinedReason.NoSubjects, method);
+        }
+
+        double[] shares = MeanShares(table);
+        return Chance(table, KappaWeights.None, shares, shares, method);
     }
 
     public static Kappa PrevalenceAndBiasAdjusted(RatingTable table)
@@ -96,8 +62,8 @@ internal static class KappaComputation
     }
 
     /// <summary>
-    /// AC1 = (pa - pe) / (1 - pe) with pe = sum pi(q) (1 - pi(q)) / (k - 1), pi(q) the mean share of category q; and its variance, which is that of
-    /// the delta method over the cells.
+    /// AC1 = 1 - q / (1 - pe) with q the observed disagreement and pe = sum pi(c) (1 - pi(c)) / (k - 1), pi(c) the mean share of category c; and its
+    /// variance, which is that of the delta method over the cells.
     /// </summary>
     public static Kappa FirstOrderAgreement(RatingTable table)
     {
@@ -109,35 +75,32 @@ internal static class KappaComputation
 
         double n = table.Total;
         int k = table.Categories;
-        double[] share = new double[k];
+        double[] share = MeanShares(table);
         double expected = 0;
         for (int q = 0; q < k; q++)
         {
-            share[q] = (table.FirstTotal(q) + (double)table.SecondTotal(q)) / (2 * n);
             expected += share[q] * (1 - share[q]) / (k - 1);
         }
 
-        double agreement = table.ObservedAgreement.Value;
-        double coefficient = (agreement - expected) / (1 - expected);
+        double loss = table.ObservedAgreement.Failures / n / (1 - expected);
 
-        // The derivative by cell (q, l), times 1 - pe: [q = l] - (1 - AC1) (1 - pi(q) + 1 - pi(l) - 1) / (k - 1), up to a constant.
+        // The derivative by cell (q, l), times pe - 1: [q differs from l] + (1 - AC1) (1 - pi(q) - pi(l)) / (k - 1), up to a constant.
         double mean = 0;
         double square = 0;
         for (int q = 0; q < k; q++)
         {
             for (int l = 0; l < k; l++)
             {
-                double slope = (q == l ? 1 : 0) - ((1 - coefficient) * (1 - share[q] - share[l]) / (k - 1));
+                double slope = (q == l ? 0 : 1) + (loss * (1 - share[q] - share[l]) / (k - 1));
                 double p = table[q, l] / n;
                 mean += p * slope;
                 square += p * slope * slope;
             }
         }
 
-        double variance = table.ObservedAgreement.Failures == 0 && IsOneCategory(table) ? 0 : Math.Max(0, square - (mean * mean)) / n;
         return new Kappa(
-            Quantity.Of(coefficient),
-            Quantity.Of(Math.Sqrt(variance) / (1 - expected)),
+            Quantity.Of(1 - loss),
+            Quantity.Of(Root(square, mean * mean) / Math.Sqrt(n) / (1 - expected)),
             Quantity.Undefined(UndefinedCause.NotPartOfMethod, "this coefficient has no test against chance"),
             method);
     }
@@ -145,25 +108,73 @@ internal static class KappaComputation
     internal static Kappa Undefined(UndefinedReason reason, string method) =>
         new(Quantity.Undefined(reason), Quantity.Undefined(reason), Quantity.Undefined(reason), method);
 
-    private static bool IsOneCategory(RatingTable table)
+    /// <summary>
+    /// 1 - qo / qe, observed over expected disagreement, each cell with v = 1 - weight. With m(ij) = v(i.) + v(.j) the sum of the mean disagreements of
+    /// row and column, n qe^2 times the variance is sum p(ij) (v(ij) - m(ij) qo / qe)^2 - qo^2, and by chance sum p(i.) p(.j) (v(ij) - m(ij))^2 - qe^2.
+    /// These are the formulas of Fleiss, Cohen and Everitt with 1 - v in place of the weights.
+    /// </summary>
+    private static Kappa Chance(RatingTable table, KappaWeights weights, double[] first, double[] second, string method)
     {
-        for (int q = 0; q < table.Categories; q++)
+        int k = table.Categories;
+        double n = table.Total;
+        double[] v = new double[k * k];
+        double[] rowMean = new double[k];
+        double[] columnMean = new double[k];
+        double observed = 0;
+        double expected = 0;
+        for (int i = 0; i < k; i++)
         {
-            if (table[q, q] == table.Total)
+            for (int j = 0; j < k; j++)
             {
-                return true;
+                double disagreement = 1 - weights.Of(i, j, k);
+                v[(i * k) + j] = disagreement;
+                rowMean[i] += disagreement * second[j];
+                columnMean[j] += disagreement * first[i];
+                observed += disagreement * (table[i, j] / n);
+                expected += disagreement * first[i] * second[j];
             }
         }
 
-        return false;
+        if (expected == 0)
+        {
+            return Undefined(OnlyChance, method);
+        }
+
+        double loss = observed / expected;
+        double spread = 0;
+        double chanceSpread = 0;
+        for (int i = 0; i < k; i++)
+        {
+            for (int j = 0; j < k; j++)
+            {
+                double mean = rowMean[i] + columnMean[j];
+                spread += table[i, j] / n * Square(v[(i * k) + j] - (mean * loss));
+                chanceSpread += first[i] * second[j] * Square(v[(i * k) + j] - mean);
+            }
+        }
+
+        double scale = Math.Sqrt(n) * expected;
+        return new Kappa(
+            Quantity.Of((expected - observed) / expected),
+            Quantity.Of(Root(spread, observed * observed) / scale),
+            Quantity.Of(Root(chanceSpread, expected * expected) / scale),
+            method,
+            weights.LeastKappa);
     }
 
-    private static double[] Shares(int categories, Func<int, long> total, double n)
+    // The root of a variance as mean of squares less square of mean.
+    private static double Root(double square, double meanSquare) =>
+        square - meanSquare <= Rounding * square ? 0 : Math.Sqrt(square - meanSquare);
+
+    private static double[] MeanShares(RatingTable table) =>
+        Shares(table.Categories, category => (table.FirstTotal(category) + (double)table.SecondTotal(category)) / (2.0 * table.Total));
+
+    private static double[] Shares(int categories, Func<int, double> share)
     {
         double[] shares = new double[categories];
         for (int i = 0; i < categories; i++)
         {
-            shares[i] = total(i) / n;
+            shares[i] = share(i);
         }
 
         return shares;

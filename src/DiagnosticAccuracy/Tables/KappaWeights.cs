@@ -57,12 +57,15 @@ public sealed class KappaWeights
 
     internal double Of(int first, int second, int categories) => _weight(first, second, categories);
 
-    internal void CheckCategories(int categories)
+    /// <summary>Gets the least kappa that these weights can give: -1 for those of the library; none for one's own.</summary>
+    internal double LeastKappa => _categories == 0 ? -1 : double.NegativeInfinity;
+
+    internal void CheckCategories(int categories, string name)
     {
         if (_categories != 0 && _categories != categories)
         {
             throw new ArgumentException(
-                $"The weights are for {Display.Of(_categories)} categories and the table has {Display.Of(categories)}; they must be the same.", nameof(categories));
+                $"{name} are for {Display.Of(_categories)} categories and the table has {Display.Of(categories)}; they must be the same.", name);
         }
     }
 }

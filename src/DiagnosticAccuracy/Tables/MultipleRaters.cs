@@ -6,15 +6,15 @@ namespace DiagnosticAccuracy;
 public sealed class MultipleRaters
 {
     private readonly long[] _totals;
-    private readonly double[] _agreements;
+    private readonly double[] _disagreements;
     private readonly double[] _counts;
 
-    private MultipleRaters(int categories, int raters, long[] totals, double[] agreements, double[] counts)
+    private MultipleRaters(int categories, int raters, long[] totals, double[] disagreements, double[] counts)
     {
         Categories = categories;
         Raters = raters;
         _totals = totals;
-        _agreements = agreements;
+        _disagreements = disagreements;
         _counts = counts;
     }
 
@@ -25,7 +25,7 @@ public sealed class MultipleRaters
     public int Raters { get; }
 
     /// <summary>Gets the number of subjects.</summary>
-    public int Subjects => _agreements.Length;
+    public int Subjects => _disagreements.Length;
 
     /// <summary>
     /// Gets the kappa of Fleiss (Psychol Bull 1971;76:378) with the null standard error of Fleiss, Nee and Landis (Psychol Bull 1979;86:974) and a
@@ -39,7 +39,7 @@ public sealed class MultipleRaters
             double n = Subjects;
             double m = Raters;
             double[] totals = Array.ConvertAll(_totals, t => (double)t);
-            double observed = _agreements.Sum();
+            double observed = _disagreements.Sum();
             if (_totals.Any(t => t == (long)Subjects * Raters))
             {
                 return KappaComputation.Undefined(
@@ -51,9 +51,9 @@ public sealed class MultipleRaters
             double cubic = 0;
             foreach (double total in totals)
             {
-                double p = total / (n * m);
-                spread += p * (1 - p);
-                cubic += p * (1 - p) * (1 - (2 * p));
+                double pq = total / (n * m) * (((n * m) - total) / (n * m));
+                spread += pq;
+                cubic += pq * (1 - (2 * total / (n * m)));
             }
 
             double nullVariance = 2 * ((spread * spread) - cubic) / (n * m * (m - 1) * spread * spread);
@@ -80,19 +80,19 @@ public sealed class MultipleRaters
 
         int subjects = counts.Length / categories;
         long[] totals = new long[categories];
-        double[] agreements = new double[subjects];
+        double[] disagreements = new double[subjects];
         double[] copy = new double[counts.Length];
         int raters = 0;
         for (int i = 0; i < subjects; i++)
         {
             int ratings = 0;
-            double pairs = 0;
+            long squares = 0;
             for (int j = 0; j < categories; j++)
             {
                 int count = counts[(i * categories) + j];
                 Guard.CountAt(count, (i * categories) + j, nameof(counts));
                 ratings = checked(ratings + count);
-                pairs += count * (count - 1.0);
+                squares += (long)count * count;
                 totals[j] += count;
                 copy[(i * categories) + j] = count;
             }
@@ -109,22 +109,23 @@ public sealed class MultipleRaters
                     nameof(counts));
             }
 
-            agreements[i] = pairs / (raters * (raters - 1.0));
+            disagreements[i] = (((long)raters * raters) - squares) / (raters * (raters - 1.0));
         }
 
-        return new MultipleRaters(categories, raters, totals, agreements, copy);
+        return new MultipleRaters(categories, raters, totals, disagreements, copy);
     }
 
+    // Observed over expected disagreement, so that a category which nearly all ratings are of costs no digits.
     private static double Coefficient(double observed, double[] totals, double subjects, double raters)
     {
+        double ratings = subjects * raters;
         double expected = 0;
         foreach (double total in totals)
         {
-            double p = total / (subjects * raters);
-            expected += p * p;
+            expected += total / ratings * ((ratings - total) / ratings);
         }
 
-        return ((observed / subjects) - expected) / (1 - expected);
+        return expected == 0 ? double.NaN : (expected - (observed / subjects)) / expected;
     }
 
     private Quantity Jackknife(double observed, double[] totals)
@@ -143,7 +144,7 @@ public sealed class MultipleRaters
                 rest[j] = totals[j] - _counts[(i * Categories) + j];
             }
 
-            values[i] = Coefficient(observed - _agreements[i], rest, Subjects - 1, Raters);
+            values[i] = Coefficient(observed - _disagreements[i], rest, Subjects - 1, Raters);
             if (double.IsNaN(values[i]))
             {
                 return Quantity.Undefined(UndefinedCause.TooFewSubjects, "without one of the subjects all ratings are of one category");

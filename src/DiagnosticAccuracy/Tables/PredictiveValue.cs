@@ -17,14 +17,17 @@ public readonly record struct PredictiveValue : IIntervalQuantity
     private const string AdjustedName = "adjusted logit at a known prevalence";
     private const string ScoreName = "score (Koopman) of the likelihood ratio at a known prevalence";
 
-    // How likely the result is when it is right, over how likely it is when it is wrong; and the prior probability of being right.
+    // How likely the result is when it is right, over how likely it is when it is wrong; and the prior probabilities of being right and wrong,
+    // both kept, since one minus a tiny one is 1.
     private readonly ProportionRatio _ratio;
     private readonly double _prior;
+    private readonly double _against;
 
-    internal PredictiveValue(ProportionRatio ratio, double prior)
+    internal PredictiveValue(ProportionRatio ratio, double prior, double against)
     {
         _ratio = ratio;
         _prior = prior;
+        _against = against;
     }
 
     /// <inheritdoc/>
@@ -54,7 +57,7 @@ public readonly record struct PredictiveValue : IIntervalQuantity
 
     private double Favourable => _prior * _ratio.Numerator.Value;
 
-    private double Unfavourable => (1 - _prior) * _ratio.Denominator.Value;
+    private double Unfavourable => _against * _ratio.Denominator.Value;
 
     /// <inheritdoc/>
     ConfidenceInterval IIntervalQuantity.Interval(Confidence confidence) => Interval(confidence);
@@ -104,12 +107,12 @@ public readonly record struct PredictiveValue : IIntervalQuantity
 
     private double AtRatio(double ratio)
     {
-        if (_prior is 0 or 1)
+        if (_prior == 0 || _against == 0)
         {
             return _prior;
         }
 
-        return double.IsPositiveInfinity(ratio) ? 1 : _prior * ratio / ((_prior * ratio) + 1 - _prior);
+        return double.IsPositiveInfinity(ratio) ? 1 : _prior * ratio / ((_prior * ratio) + _against);
     }
 
     private ConfidenceInterval AdjustedLogit(Confidence confidence)
@@ -117,8 +120,8 @@ public readonly record struct PredictiveValue : IIntervalQuantity
         double z = StandardNormal.UpperQuantile(confidence.Tail);
         double right = Adjusted(_ratio.Numerator, z);
         double wrong = Adjusted(_ratio.Denominator, z);
-        double variance = ((1 - right) / (right * (_ratio.Numerator.Trials + (z * z))))
-            + ((1 - wrong) / (wrong * (_ratio.Denominator.Trials + (z * z))));
+        double variance = (Adjusted(_ratio.Numerator.Complement, z) / (right * (_ratio.Numerator.Trials + (z * z))))
+            + (Adjusted(_ratio.Denominator.Complement, z) / (wrong * (_ratio.Denominator.Trials + (z * z))));
         double factor = Math.Exp(z * Math.Sqrt(variance));
         double ratio = right / wrong;
         return new ConfidenceInterval(

@@ -17,11 +17,11 @@ public readonly record struct PredictiveValues
     public Prevalence Prevalence { get; }
 
     /// <summary>Gets the positive predictive value: the probability of the condition after a positive result.</summary>
-    public PredictiveValue Positive => new(Table.PositiveLikelihoodRatio, Prevalence.Value);
+    public PredictiveValue Positive => new(Table.PositiveLikelihoodRatio, Prevalence.Value, 1 - Prevalence.Value);
 
     /// <summary>Gets the negative predictive value: the probability of no condition after a negative result.</summary>
     public PredictiveValue Negative => new(
-        new ProportionRatio(Table.Specificity, Table.FalseNegativeRate, UndefinedReason.NoNegativeResults), 1 - Prevalence.Value);
+        new ProportionRatio(Table.Specificity, Table.FalseNegativeRate, UndefinedReason.NoNegativeResults), 1 - Prevalence.Value, Prevalence.Value);
 
     /// <summary>Both values and the prevalence.</summary>
     /// <returns>The text, in the invariant culture.</returns>

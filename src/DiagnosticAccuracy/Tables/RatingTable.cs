@@ -42,6 +42,13 @@ public sealed class RatingTable
     /// </summary>
     public Kappa PrevalenceAndBiasAdjustedKappa => KappaComputation.PrevalenceAndBiasAdjusted(this);
 
+    /// <summary>
+    /// Gets Scott's pi (Public Opin Q 1955;19:321): chance agreement from the mean share of each category, as if both ratings used the categories alike.
+    /// Its value is the kappa of Fleiss for two ratings; its standard error is that of the delta method over the cells. Undefined when there are no
+    /// subjects, or when both ratings use one category only.
+    /// </summary>
+    public Kappa ScottPi => KappaComputation.Scott(this);
+
     /// <summary>Gets Gwet's first-order agreement coefficient (AC1; Gwet, Br J Math Stat Psychol 2008;61:29).</summary>
     public Kappa FirstOrderAgreementCoefficient => KappaComputation.FirstOrderAgreement(this);
 
@@ -53,8 +60,8 @@ public sealed class RatingTable
     {
         get
         {
-            Category(first, nameof(first));
-            Category(second, nameof(second));
+            _ = Category(first, Categories, nameof(first));
+            _ = Category(second, Categories, nameof(second));
             return _counts[(first * Categories) + second];
         }
     }
@@ -78,6 +85,34 @@ public sealed class RatingTable
         }
 
         return new RatingTable(counts.ToArray(), categories, total);
+    }
+
+    /// <summary>A table of any sequence of rows.</summary>
+    /// <typeparam name="T">The type of a row.</typeparam>
+    /// <param name="rows">The rows, one a subject; they are read once.</param>
+    /// <param name="first">Gives the category of the first rating, from 0.</param>
+    /// <param name="second">Gives the category of the second rating, from 0.</param>
+    /// <param name="categories">The number of categories, 2 or more.</param>
+    /// <returns>The table; empty for no rows.</returns>
+    /// <exception cref="ArgumentNullException">An argument is null.</exception>
+    /// <exception cref="ArgumentOutOfRangeException">There are fewer than 2 categories, or a row is in none of them; the message says which row.</exception>
+    public static RatingTable FromRows<T>(IEnumerable<T> rows, Func<T, int> first, Func<T, int> second, int categories)
+    {
+        Guard.NotNull(rows);
+        Guard.NotNull(first);
+        Guard.NotNull(second);
+        Guard.AtLeast(categories, 2);
+        long[] counts = new long[checked(categories * categories)];
+        long total = 0;
+        foreach (T row in rows)
+        {
+            int one = Category(first(row), categories, $"{nameof(first)} of row {Display.Of(total)}");
+            int other = Category(second(row), categories, $"{nameof(second)} of row {Display.Of(total)}");
+            counts[(one * categories) + other]++;
+            total++;
+        }
+
+        return new RatingTable(counts, categories, total);
     }
 
     /// <summary>How often the first rating chose a category.</summary>
@@ -141,7 +176,7 @@ public sealed class RatingTable
     /// <exception cref="ArgumentOutOfRangeException">The category is not in the table.</exception>
     public Quantity BiasIndex(int category = 0)
     {
-        Category(category, nameof(category));
+        _ = Category(category, Categories, nameof(category));
         return Total == 0
             ? Quantity.Undefined(UndefinedReason.NoSubjects)
             : Quantity.Of(Math.Abs(FirstTotal(category) - SecondTotal(category)) / (double)Total);
@@ -168,11 +203,7 @@ public sealed class RatingTable
     /// <returns>The text, in the invariant culture.</returns>
     public override string ToString() => $"{Display.Of(Categories)} categories, {Display.Of(Total)} subjects, agreement on {ObservedAgreement}";
 
-    private void Category(int category, string name)
-    {
-        if (category < 0 || category >= Categories)
-        {
-            throw Guard.OutOfRange(name, category, $"a category from 0 to {Display.Of(Categories - 1)}");
-        }
-    }
+    private static int Category(int category, int categories, string name) => category >= 0 && category < categories
+        ? category
+        : throw Guard.OutOfRange(name, category, $"a category from 0 to {Display.Of(categories - 1)}");
 }

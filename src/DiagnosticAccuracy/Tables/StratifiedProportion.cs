@@ -38,7 +38,7 @@ public readonly record struct StratifiedProportion : IIntervalQuantity
     /// <inheritdoc/>
     public UndefinedReason? WhyUndefined => _strata is null ? UndefinedReason.NotComputed
         : Filled.Any() ? null
-        : new UndefinedReason(UndefinedCause.NoSubjects, "no stratum has subjects");
+        : _strata[0].WhyUndefined;
 
     private IEnumerable<Proportion> Filled => (_strata ?? []).Where(stratum => stratum.IsDefined);
 
@@ -76,18 +76,27 @@ public readonly record struct StratifiedProportion : IIntervalQuantity
             Name);
     }
 
+    /// <summary>Whether the counts of the strata, in their order, and the weights are equal.</summary>
+    /// <param name="other">The other mean.</param>
+    /// <returns>True when they are.</returns>
+    public bool Equals(StratifiedProportion other) =>
+        Weighting == other.Weighting && (_strata is null) == (other._strata is null) && (_strata ?? []).SequenceEqual(other._strata ?? []);
+
+    /// <inheritdoc/>
+    public override int GetHashCode() => (Weighting, _strata?.Count, _strata?[0]).GetHashCode();
+
     /// <summary>The value to six significant digits in the invariant culture, or "undefined: " and the reason.</summary>
     /// <returns>The text.</returns>
     public override string ToString() => Display.Of((IQuantity)this);
 
     private double Weight(Proportion stratum)
     {
-        double p = (stratum.Successes + 0.5) / (stratum.Trials + 1.0);
+        double all = stratum.Trials + 1.0;
         return Weighting switch
         {
             StratumWeighting.BySize => stratum.Trials,
             StratumWeighting.Equal => 1,
-            _ => stratum.Trials / (p * (1 - p)),
+            _ => stratum.Trials / ((stratum.Successes + 0.5) / all * ((stratum.Failures + 0.5) / all)),
         };
     }
 }

@@ -34,12 +34,10 @@ public sealed class StratifiedTables
     /// Gets the positive likelihood ratio pooled by Mantel and Haenszel (J Natl Cancer Inst 1959;22:719), with the variance of Greenland and Robins
     /// (Biometrics 1985;41:55).
     /// </summary>
-    public PooledRatio PositiveLikelihoodRatio => MantelHaenszel.RiskRatio(
-        Strata, table => table.TruePositives, table => table.FalsePositives, "log with the Greenland-Robins variance");
+    public PooledRatio PositiveLikelihoodRatio => MantelHaenszel.Ratio(Strata, PooledKind.PositiveLikelihoodRatio);
 
     /// <summary>Gets the negative likelihood ratio pooled in the same way.</summary>
-    public PooledRatio NegativeLikelihoodRatio => MantelHaenszel.RiskRatio(
-        Strata, table => table.FalseNegatives, table => table.TrueNegatives, "log with the Greenland-Robins variance");
+    public PooledRatio NegativeLikelihoodRatio => MantelHaenszel.Ratio(Strata, PooledKind.NegativeLikelihoodRatio);
 
     /// <summary>
     /// Gets the diagnostic odds ratio pooled by Mantel and Haenszel, with the variance of Robins, Breslow and Greenland (Biometrics 1986;42:311).
@@ -50,13 +48,13 @@ public sealed class StratifiedTables
     /// Gets the test of Breslow and Day (Statistical Methods in Cancer Research I, 1980) of one odds ratio in all strata, with the correction of
     /// Tarone (Biometrika 1985;72:91). Strata with an empty margin have no odds ratio and take no part.
     /// </summary>
-    public HomogeneityTest OddsRatioHomogeneity => MantelHaenszel.BreslowDay(Strata, DiagnosticOddsRatio);
+    public HomogeneityTest OddsRatioHomogeneity => StrataHomogeneity.BreslowDay(Strata, DiagnosticOddsRatio);
 
     /// <summary>Gets Pearson's chi-squared test of one sensitivity in all strata that have subjects with the condition.</summary>
-    public HomogeneityTest SensitivityHomogeneity => MantelHaenszel.Pearson([.. Strata.Select(table => table.Sensitivity)], "Pearson chi-squared, sensitivity");
+    public HomogeneityTest SensitivityHomogeneity => StrataHomogeneity.Pearson([.. Strata.Select(table => table.Sensitivity)], "Pearson chi-squared, sensitivity");
 
     /// <summary>Gets Pearson's chi-squared test of one specificity in all strata that have subjects without the condition.</summary>
-    public HomogeneityTest SpecificityHomogeneity => MantelHaenszel.Pearson([.. Strata.Select(table => table.Specificity)], "Pearson chi-squared, specificity");
+    public HomogeneityTest SpecificityHomogeneity => StrataHomogeneity.Pearson([.. Strata.Select(table => table.Specificity)], "Pearson chi-squared, specificity");
 
     /// <summary>The tables of several strata.</summary>
     /// <param name="strata">The tables, one a stratum, of different subjects; at least one.</param>
