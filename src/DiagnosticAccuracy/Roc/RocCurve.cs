@@ -60,6 +60,26 @@ public sealed class RocCurve
     /// <returns>The partial area, raw and standardised; undefined, with the reason, when a group is empty.</returns>
     public PartialArea PartialArea(PartialAreaRange range) => PartialAreas.Of(Sample, range);
 
+    /// <summary>The sensitivity at a specificity that was stated beforehand, with the error of a cutoff that is estimated.</summary>
+    /// <param name="specificity">The specificity, from 0 to 1.</param>
+    /// <returns>The greatest sensitivity on the curve at it; undefined, with the reason, when a group is empty.</returns>
+    /// <exception cref="ArgumentOutOfRangeException"><paramref name="specificity"/> is NaN or not from 0 to 1.</exception>
+    public FixedPoint SensitivityAtSpecificity(double specificity)
+    {
+        Guard.Probability(specificity);
+        return FixedPoints.Of(this, FixedPointKind.SensitivityAtSpecificity, specificity);
+    }
+
+    /// <summary>The specificity at a sensitivity that was stated beforehand, with the error of a cutoff that is estimated.</summary>
+    /// <param name="sensitivity">The sensitivity, from 0 to 1.</param>
+    /// <returns>The greatest specificity on the curve at it; undefined, with the reason, when a group is empty.</returns>
+    /// <exception cref="ArgumentOutOfRangeException"><paramref name="sensitivity"/> is NaN or not from 0 to 1.</exception>
+    public FixedPoint SpecificityAtSensitivity(double sensitivity)
+    {
+        Guard.Probability(sensitivity);
+        return FixedPoints.Of(this, FixedPointKind.SpecificityAtSensitivity, sensitivity);
+    }
+
     /// <summary>The test that the scores do not tell the groups apart: Mann-Whitney, with ties.</summary>
     /// <param name="method">The method; the normal approximation with the variance corrected for ties unless said.</param>
     /// <param name="alternative">Two-sided unless said; greater means that the area is above one half.</param>
