@@ -21,6 +21,8 @@ foreach (AreaVarianceMethod method in Enum.GetValues<AreaVarianceMethod>())
 Console.WriteLine(curve.TestOfChance(ChanceTestMethod.Exact, Alternative.Greater));
 Console.WriteLine(curve.PartialArea(PartialAreaRange.OverFalsePositiveRate(0, 0.2)).Interval());
 Console.WriteLine(curve.PartialArea(PartialAreaRange.OverSensitivity(0.8, 1)).Standardised);
+FixedPoint fixedPoint = curve.SensitivityAtSpecificity(0.9);
+Console.WriteLine($"{fixedPoint}, {fixedPoint.Interval()}");
 Console.WriteLine(curve.At(Cutoff.AtOrAbove(0.5)));
 Console.WriteLine(CutoffRule.SensitivityAtLeast(0.9).Choose(curve));
 Console.WriteLine(CutoffRule.LargestYoudenIndex.Choose(curve));

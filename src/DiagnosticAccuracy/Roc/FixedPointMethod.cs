@@ -2,8 +2,8 @@ namespace DiagnosticAccuracy;
 
 /// <summary>How to compute a confidence interval of a sensitivity at a fixed specificity, or the reverse.</summary>
 /// <remarks>
-/// In a seeded simulation (normal scores 1.5 standard deviations apart, specificity .9, 100 + 100 subjects, 95 %) the logit covered at least 93 %, the pseudo
-/// counts 92.6 % and Wald 91.7 %, with a Monte-Carlo error of half a point: all somewhat below their level there. Other settings were not measured widely.
+/// Measured coverage at a nominal 95 % over three shapes of scores, four areas, three specificities and 50 to 500 in a group: logit 91.7 to 98.1 %, pseudo counts 91.5
+/// to 98.6 %, Wald 84.9 to 96.8 %; an interval that takes the cutoff as fixed beforehand 67.4 to 95.8 %. See docs/evidence/fixed-point-coverage.md.
 /// </remarks>
 public enum FixedPointMethod
 {
