@@ -14,12 +14,6 @@ internal static class StandardNormal
     /// <summary>P(|Z| &gt; |z|).</summary>
     public static double TwoSided(double z) => Math.Min(1, 2 * Normal.CDF(0, 1, -Math.Abs(z)));
 
-    /// <summary>The z with P(Z &lt;= z) = p.</summary>
-    public static double LowerQuantile(double p) => p == 0.5 ? 0 : Normal.InvCDF(0, 1, p);
-
     /// <summary>The z with P(Z &gt; z) = q.</summary>
     public static double UpperQuantile(double q) => q == 0.5 ? 0 : -Normal.InvCDF(0, 1, q);
-
-    /// <summary>The density.</summary>
-    public static double Density(double z) => Normal.PDF(0, 1, z);
 }

@@ -51,7 +51,7 @@ public class HandComputedAreasTests
         Assert.Equal(ratings.GetProperty("auc").GetDouble(), area.Value, 1e-15);
         Assert.Equal(ratings.GetProperty("se_delong").GetDouble(), area.StandardError.Value, 1e-14);
 
-        // The unbiased variance of the Mann-Whitney statistic, from the same sums (R).
+        // The group sizes of the file; its other errors are in AreaVarianceTests.
         double n1 = with.Sum();
         double n0 = without.Sum();
         Assert.Equal(n1, ratings.GetProperty("M").GetDouble());
